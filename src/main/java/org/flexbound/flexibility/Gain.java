@@ -1,0 +1,14 @@
+package org.flexbound.flexibility;
+
+/**
+ * A relative error common to many absolute coefficients: reading = (1 + gain) · truth.
+ *
+ * <p>An instrument's calibration is one gain, shared by everything it read under the same
+ * calibration; a load instrument's fixed floor is one gain for each load point (common to all
+ * gauges of that column).
+ *
+ * @param key what makes it the same gain elsewhere: instrument and calibration
+ * @param description for the reader, e.g. {@code load cell C1, certificate 4711}
+ * @param priorUncertainty standard uncertainty (k = 1), relative
+ */
+public record Gain(String key, String description, double priorUncertainty) {}
