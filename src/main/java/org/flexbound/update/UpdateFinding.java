@@ -1,0 +1,94 @@
+package org.flexbound.update;
+
+import org.flexbound.finding.FindingKind;
+import org.flexbound.finding.Severity;
+
+/** What an update can find. */
+public enum UpdateFinding implements FindingKind {
+  /** A change without a reason. */
+  NEEDS_REASON(
+      "UPDATE-NEEDS-REASON",
+      Severity.WARNING,
+      "A parameter moved far, or ended on a bound, without a justification.",
+      "It needs a reason before this model is used: state it under 'justification'."),
+  /** The best fit does not agree with the data. */
+  MISFITS_EVEN_AT_BEST(
+      "UPDATE-MISFITS",
+      Severity.WARNING,
+      "Even the best fit within the bounds does not agree with the data.",
+      "Look at the load cases named: a fault of the test, or a part that the model lacks."),
+  /** The solver stopped before it converged. */
+  NOT_CONVERGED(
+      "UPDATE-NOT-CONVERGED",
+      Severity.WARNING,
+      "The solver did not converge.",
+      "Tighten the bounds, or fix parameters that the test cannot see."),
+  /** Starts came to different points. */
+  STARTS_DISAGREE(
+      "UPDATE-STARTS-DISAGREE",
+      Severity.WARNING,
+      "Different starting points came to different answers.",
+      "Treat the estimate as one of several, and add load cases that tell them apart."),
+  /** Held-out load cases are predicted badly. */
+  NOT_VALIDATED(
+      "UPDATE-NOT-VALIDATED",
+      Severity.WARNING,
+      "Held-out load cases are predicted worse than their uncertainty allows.",
+      "Do not use the updated model for load cases of that kind before the reason is found."),
+  /** A coefficient does not fit with the others. */
+  OUTLYING_COEFFICIENT(
+      "UPDATE-OUTLYING-COEFFICIENT",
+      Severity.WARNING,
+      "A coefficient lies further from the fit than its uncertainty allows.",
+      "Look at its runs before relying on the parameters that it pulls."),
+  /** A configuration disagrees. */
+  CONFIGURATION_DISAGREES(
+      "UPDATE-CONFIGURATION-DISAGREES",
+      Severity.WARNING,
+      "One configuration fits worse than its uncertainty allows.",
+      "Look at how that configuration was set up."),
+  /** The tests cannot see a parameter. */
+  NOT_IDENTIFIABLE(
+      "UPDATE-NOT-IDENTIFIABLE",
+      Severity.NOTE,
+      "The tests say next to nothing of a parameter.",
+      "Its value is the prior's; load or measure where it deforms if it matters."),
+  /** The data rest on one run, so that scatter is only stated. */
+  CUT_MOVED(
+      "UPDATE-CUT-MOVED",
+      Severity.NOTE,
+      "The number of modes was moved to the nearest gap in the frequencies.",
+      "State that number of modes.");
+
+  private final String code;
+  private final Severity severity;
+  private final String meaning;
+  private final String remedy;
+
+  UpdateFinding(String code, Severity severity, String meaning, String remedy) {
+    this.code = code;
+    this.severity = severity;
+    this.meaning = meaning;
+    this.remedy = remedy;
+  }
+
+  @Override
+  public String code() {
+    return code;
+  }
+
+  @Override
+  public Severity severity() {
+    return severity;
+  }
+
+  @Override
+  public String meaning() {
+    return meaning;
+  }
+
+  @Override
+  public String remedy() {
+    return remedy;
+  }
+}

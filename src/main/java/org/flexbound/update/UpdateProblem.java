@@ -1,0 +1,31 @@
+package org.flexbound.update;
+
+import java.util.List;
+import org.flexbound.flexibility.MeasuredFlexibility;
+import org.flexbound.study.HeldOutCase;
+import org.flexbound.study.Rule;
+
+/**
+ * What is to be solved.
+ *
+ * @param parameters what may change
+ * @param measured the measured flexibility of each configuration
+ * @param function the computed flexibility
+ * @param rule how the weight of the prior is chosen for the point shown
+ * @param heldOut load cases that are predicted, not fitted
+ * @param starts how many starting points, at least 1 (the first is the nominal model)
+ */
+public record UpdateProblem(
+    List<WorkingParameter> parameters,
+    List<MeasuredFlexibility> measured,
+    FlexibilityFunction function,
+    Rule rule,
+    List<HeldOutCase> heldOut,
+    int starts) {
+  /** Copies the lists. */
+  public UpdateProblem {
+    parameters = List.copyOf(parameters);
+    measured = List.copyOf(measured);
+    heldOut = List.copyOf(heldOut);
+  }
+}
