@@ -158,7 +158,7 @@ final class ParameterReader {
     String component = path.substring(path.lastIndexOf('.') + 1);
     if (path.startsWith("members.")) {
       return Optional.of(
-          component.startsWith("E") && component.length() > 2 || component.equals("GJ")
+          component.startsWith("EI") || component.equals("GJ")
               ? Dimension.FORCE.times(Dimension.AREA)
               : Dimension.FORCE);
     }
@@ -191,14 +191,12 @@ final class ParameterReader {
       return Optional.empty();
     }
     if (value.get() instanceof Json.Text text) {
-      switch (text.text().strip().toLowerCase(Locale.ROOT)) {
-        case "rigid":
-          return Optional.of(new Level.Rigid());
-        case "free":
-          return Optional.of(new Level.Free());
-        default:
-          return quantity(value.get(), text.text(), dimension(scales), key).map(Level.Stiffness::new);
-      }
+      return switch (text.text().strip().toLowerCase(Locale.ROOT)) {
+        case "rigid" -> Optional.of(new Level.Rigid());
+        case "free" -> Optional.of(new Level.Free());
+        default ->
+            quantity(value.get(), text.text(), dimension(scales), key).map(Level.Stiffness::new);
+      };
     }
     entries.wrong(
         value.get(), "a multiple of the nominal stiffness, a stiffness with its unit, rigid or free");
@@ -254,16 +252,10 @@ final class ParameterReader {
     if (value.isEmpty()) {
       return Working.LN;
     }
-    if (value.get() instanceof Json.Text text) {
-      switch (text.text()) {
-        case "ln":
-          return Working.LN;
-        case "compliance":
-          return Working.COMPLIANCE;
-        case "fixity":
-          return Working.FIXITY;
-        default:
-          break;
+    for (Working working : Working.values()) {
+      if (value.get() instanceof Json.Text text
+          && text.text().equals(working.name().toLowerCase(Locale.ROOT))) {
+        return working;
       }
     }
     entries.wrong(value.get(), "\"ln\", \"compliance\" or \"fixity\"");

@@ -201,15 +201,15 @@ public final class StudyReader {
       return new Rule.Stated(number.value());
     }
     if (value.get() instanceof Json.Text text) {
-      switch (text.text()) {
-        case "prior":
-          return new Rule.Prior();
-        case "discrepancy":
-          return new Rule.Discrepancy();
-        case "curve-corner":
-          return new Rule.CurveCorner();
-        default:
-          break;
+      Optional<Rule> named =
+          switch (text.text()) {
+            case "prior" -> Optional.of(new Rule.Prior());
+            case "discrepancy" -> Optional.of(new Rule.Discrepancy());
+            case "curve-corner" -> Optional.of(new Rule.CurveCorner());
+            default -> Optional.empty();
+          };
+      if (named.isPresent()) {
+        return named.get();
       }
     }
     findings.add(
