@@ -75,7 +75,7 @@ public final class StudyReader {
             configurations,
             flexibility(entries, study),
             parameters(entries, study),
-            rule(entries, study),
+            rule(study),
             heldOut(entries, study),
             study.get("reduction"),
             study.get("limits"),
@@ -192,7 +192,7 @@ public final class StudyReader {
     return result;
   }
 
-  private Rule rule(JsonEntries entries, Json.Members study) {
+  private Rule rule(Json.Members study) {
     Optional<Json> value = study.get("rule");
     if (value.isEmpty()) {
       return new Rule.Prior();
