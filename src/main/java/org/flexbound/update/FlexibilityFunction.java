@@ -27,10 +27,40 @@ public interface FlexibilityFunction {
   }
 
   /**
-   * Coefficients and Jacobian at one point.
-   *
-   * @param coefficients the absolute coefficients, SI
-   * @param jacobian row by coefficient, column by parameter
+   * Coefficients and Jacobian at one point. Handed over, not copied: a Jacobian may have half a
+   * million entries, and whoever asked for it is its only reader.
    */
-  record Computed(double[] coefficients, double[][] jacobian) {}
+  final class Computed {
+    private final double[] coefficients;
+    private final double[][] jacobian;
+
+    /**
+     * What was computed.
+     *
+     * @param coefficients the absolute coefficients, SI
+     * @param jacobian row by coefficient, column by parameter
+     */
+    public Computed(double[] coefficients, double[][] jacobian) {
+      this.coefficients = coefficients;
+      this.jacobian = jacobian;
+    }
+
+    /**
+     * The absolute coefficients.
+     *
+     * @return SI, not copied
+     */
+    public double[] coefficients() {
+      return coefficients;
+    }
+
+    /**
+     * Their derivatives.
+     *
+     * @return row by coefficient, column by parameter, not copied
+     */
+    public double[][] jacobian() {
+      return jacobian;
+    }
+  }
 }

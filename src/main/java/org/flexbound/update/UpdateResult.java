@@ -1,6 +1,5 @@
 package org.flexbound.update;
 
-import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.flexbound.finding.Finding;
@@ -51,7 +50,7 @@ public record UpdateResult(
     List<CollinearGroup> groups,
     List<Double> singularValues,
     int rank,
-    double[][] correlation,
+    List<List<Double>> correlation,
     List<CoefficientFit> coefficients,
     List<WithoutLoadCase> withoutLoadCase,
     Optional<Validation> validation,
@@ -59,7 +58,7 @@ public record UpdateResult(
     Unexplained unexplained,
     Convergence convergence,
     List<Finding> findings) {
-  /** Copies lists and arrays. */
+  /** Copies the lists. */
   public UpdateResult {
     parameters = List.copyOf(parameters);
     gains = List.copyOf(gains);
@@ -67,20 +66,11 @@ public record UpdateResult(
     profiles = List.copyOf(profiles);
     groups = List.copyOf(groups);
     singularValues = List.copyOf(singularValues);
-    correlation = copy(correlation);
+    correlation = correlation.stream().map(List::copyOf).toList();
     coefficients = List.copyOf(coefficients);
     withoutLoadCase = List.copyOf(withoutLoadCase);
     configurations = List.copyOf(configurations);
     findings = List.copyOf(findings);
-  }
-
-  private static double[][] copy(double[][] rows) {
-    return Arrays.stream(rows).map(double[]::clone).toArray(double[][]::new);
-  }
-
-  @Override
-  public double[][] correlation() {
-    return copy(correlation);
   }
 
   /**
