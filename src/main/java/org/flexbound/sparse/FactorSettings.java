@@ -26,7 +26,7 @@ public record FactorSettings(Ordering ordering, int threads, double pivotLimit) 
 
   /** One thread, the order with the least estimated work. */
   public static FactorSettings defaults() {
-    return new FactorSettings(Ordering.minimumDegree(), 1, DEFAULT_PIVOT_LIMIT);
+    return new FactorSettings(Ordering.leastWork(), 1, DEFAULT_PIVOT_LIMIT);
   }
 
   /** The same with another ordering. */

@@ -20,6 +20,8 @@ final class MinimumDegree {
 
   private final int n;
   private final int total;
+  /** Vertices from this one on are the halo: they count in degrees but are not eliminated. */
+  private final int inner;
   /** Workspace of all lists. */
   private int[] lists;
   private int free;
@@ -42,12 +44,24 @@ final class MinimumDegree {
   private final int[] hash;
   private int tag = 1;
   private int leastDegree;
+  /** Weight of all vertices but those set aside. */
+  private int present;
   private int eliminated;
   /** Elements in the order of their creation. */
   private final int[] pivots;
   private int pivotCount;
 
   MinimumDegree(Graph graph) {
+    this(graph, graph.vertexCount());
+  }
+
+  /**
+   * An order of the first vertices of a graph; the others stand for what is eliminated later.
+   *
+   * @param inner number of vertices to order; the order returned holds only these
+   */
+  MinimumDegree(Graph graph, int inner) {
+    this.inner = inner;
     n = graph.vertexCount();
     total = graph.totalWeight();
     int edges = graph.neighbours.length;
@@ -81,17 +95,19 @@ final class MinimumDegree {
 
   int[] order() {
     int[] dense = setDenseAside();
-    for (int v = n - 1; v >= 0; v--) {
+    int live = 0;
+    for (int v = inner - 1; v >= 0; v--) {
       if (weight[v] > 0) {
         enlist(v);
+        live += weight[v];
       }
     }
-    int live = total;
-    for (int v : dense) {
-      live -= -weight[v];
+    present = live;
+    for (int v = inner; v < n; v++) {
+      present += weight[v];
     }
     while (eliminated < live) {
-      eliminate(nextPivot(), live);
+      eliminate(nextPivot());
     }
     return collect(dense);
   }
@@ -101,12 +117,12 @@ final class MinimumDegree {
     double limit = Math.max(16, DENSE * Math.sqrt(total));
     int[] dense = new int[n];
     int count = 0;
-    for (int v = 0; v < n; v++) {
+    for (int v = 0; v < inner; v++) {
       if (degree[v] > limit && length[v] > limit / Math.max(1, weight[v])) {
         dense[count++] = v;
       }
     }
-    if (count == 0 || count == n) {
+    if (count == 0 || count == inner) {
       return new int[0];
     }
     for (int k = 0; k < count; k++) {
@@ -159,7 +175,7 @@ final class MinimumDegree {
     return pivot;
   }
 
-  private void eliminate(int pivot, int live) {
+  private void eliminate(int pivot) {
     int pivotWeight = weight[pivot];
     eliminated += pivotWeight;
     int size = formElement(pivot);
@@ -170,7 +186,7 @@ final class MinimumDegree {
     for (int p = from; p < to; p++) {
       int v = lists[p];
       int left = shorten(v, pivot);
-      if (left == 0) {
+      if (left == 0 && v < inner) {
         // Nothing outside the newest element is left: eliminated together with the pivot.
         int w = -weight[v];
         parent[v] = pivot;
@@ -184,7 +200,7 @@ final class MinimumDegree {
     degree[pivot] = remaining;
     advanceTag(size);
     mergeAlike(from, to);
-    finish(pivot, from, to, remaining, live);
+    finish(pivot, from, to, remaining);
     weight[pivot] = pivotWeight;
     if (length[pivot] == 0) {
       stamp[pivot] = 0;
@@ -247,7 +263,9 @@ final class MinimumDegree {
   private int take(int v) {
     int w = weight[v];
     weight[v] = -w;
-    delist(v);
+    if (v < inner) {
+      delist(v);
+    }
     return w;
   }
 
@@ -278,7 +296,7 @@ final class MinimumDegree {
   private int shorten(int v, int pivot) {
     int begin = start[v];
     int write = begin;
-    int key = 0;
+    int key = v < inner ? 0 : 1;
     int outside = 0;
     int end = begin + elements[v];
     int last = begin + length[v];
@@ -307,7 +325,7 @@ final class MinimumDegree {
         key += u;
       }
     }
-    if (outside == 0) {
+    if (outside == 0 && v < inner) {
       return 0;
     }
     degree[v] = Math.min(degree[v], outside);
@@ -351,7 +369,7 @@ final class MinimumDegree {
         int before = i;
         int j = next[i];
         while (j != NONE) {
-          if (length[j] == length[i] && elements[j] == elements[i] && allMarked(j)) {
+          if (length[j] == length[i] && elements[j] == elements[i] && (i < inner) == (j < inner) && allMarked(j)) {
             parent[j] = i;
             weight[i] += weight[j];
             weight[j] = 0;
@@ -390,9 +408,9 @@ final class MinimumDegree {
   }
 
   /** Gives the members their new degrees and takes the eliminated ones out of the element's list. */
-  private void finish(int pivot, int from, int to, int size, int live) {
+  private void finish(int pivot, int from, int to, int size) {
     int write = from;
-    int left = live - eliminated;
+    int left = present - eliminated;
     for (int p = from; p < to; p++) {
       int v = lists[p];
       int w = -weight[v];
@@ -401,7 +419,9 @@ final class MinimumDegree {
       }
       weight[v] = w;
       degree[v] = Math.max(0, Math.min(degree[v] + size - w, left - w));
-      enlist(v);
+      if (v < inner) {
+        enlist(v);
+      }
       lists[write++] = v;
     }
     length[pivot] = write - from;
@@ -471,7 +491,7 @@ final class MinimumDegree {
     for (int v : dense) {
       isDense[v] = true;
     }
-    int[] order = new int[n];
+    int[] order = new int[inner];
     int count = 0;
     for (int e : Trees.postorder(tree, pivots, pivotCount)) {
       for (int v = firstMember[e]; v != NONE; v = nextMember[v]) {

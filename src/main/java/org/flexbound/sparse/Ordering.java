@@ -17,4 +17,18 @@ public interface Ordering {
   static Ordering minimumDegree() {
     return graph -> new MinimumDegree(graph).order();
   }
+
+  /**
+   * Nested dissection by multilevel bisection and breadth-first levels: best for large graphs that spread in two or three directions.
+   *
+   * @param seed of the random choices; the same seed gives the same order
+   */
+  static Ordering nestedDissection(long seed) {
+    return new NestedDissection(seed);
+  }
+
+  /** Minimum degree, and nested dissection where the work per vertex promises a gain; the order with the least estimated work is kept. */
+  static Ordering leastWork() {
+    return new LeastWork();
+  }
 }

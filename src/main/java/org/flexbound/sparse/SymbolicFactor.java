@@ -5,70 +5,160 @@ import java.util.Arrays;
 /**
  * The order of elimination and the pattern of the factor of every matrix on one {@link SparsePattern}: made once, reused for each new set of
  * values. Immutable, may be used by several threads.
+ *
+ * <p>The columns of the factor stand in supernodes: runs of columns that have the same rows below. Supernode s has the columns {@code
+ * starts[s] .. starts[s + 1] - 1} and below them the rows {@code rows[rowStarts[s]] .. rows[rowStarts[s + 1] - 1]}, ascending, in the order
+ * of elimination. Its front is the dense matrix of its columns and rows.
  */
 public final class SymbolicFactor {
   private final SparsePattern pattern;
   private final FactorSettings settings;
+  private final long nonzeros;
+  private final double operations;
   /** order[k] is the unknown eliminated k-th. */
   final int[] order;
-  final int[] parent;
-  final long[] columnStarts;
-  /** Upper triangle of the permuted matrix by columns: rows and the position of each value. */
-  final int[] upperStarts;
-  final int[] upperRows;
-  final int[] upperPlaces;
+  /** The place of every unknown in the order. */
+  final int[] places;
+  final int[] starts;
+  final int[] parents;
+  final int[] rowStarts;
+  final int[] rows;
+  /** For each row of a supernode its position in the parent's front. */
+  final int[] relative;
+  /** Entries of the matrix by supernode: position among the matrix's values, and in the supernode's panel. */
+  final int[] entryStarts;
+  final int[] entrySources;
+  final int[] entryTargets;
+  /** Children of every supernode, in the order in which their update matrices are added. */
+  final int[] childStarts;
+  final int[] children;
 
-  private SymbolicFactor(SparsePattern pattern, FactorSettings settings, int[] order) {
+  private SymbolicFactor(SparsePattern pattern, FactorSettings settings, int[] firstOrder) {
     this.pattern = pattern;
     this.settings = settings;
-    this.order = order;
-    int n = order.length;
-    int[] at = Trees.inverse(order);
+    ColumnCounts counts = OrderChoice.lowerRows(pattern, firstOrder);
+    nonzeros = counts.nonzeros();
+    operations = counts.operations();
+    SupernodeTree tree = new SupernodeTree(counts);
+    int n = firstOrder.length;
+    order = new int[n];
+    for (int k = 0; k < n; k++) {
+      order[k] = firstOrder[tree.columnOrder[k]];
+    }
+    places = Trees.inverse(order);
+    starts = tree.starts;
+    parents = tree.parents;
+    int supernodes = parents.length;
+    childStarts = new int[supernodes + 1];
+    for (int p : parents) {
+      if (p >= 0) {
+        childStarts[p + 1]++;
+      }
+    }
+    for (int s = 0; s < supernodes; s++) {
+      childStarts[s + 1] += childStarts[s];
+    }
+    children = new int[childStarts[supernodes]];
+    int[] next = childStarts.clone();
+    for (int s = 0; s < supernodes; s++) {
+      if (parents[s] >= 0) {
+        children[next[parents[s]]++] = s;
+      }
+    }
+    // Entries by column of the factor.
     int[] cs = pattern.starts();
     int[] rs = pattern.rowIndices();
-    upperStarts = new int[n + 1];
+    int[] columnStarts = new int[n + 1];
     for (int j = 0; j < n; j++) {
       for (int p = cs[j]; p < cs[j + 1]; p++) {
-        upperStarts[Math.max(at[j], at[rs[p]]) + 1]++;
+        columnStarts[Math.min(places[j], places[rs[p]]) + 1]++;
       }
     }
     for (int j = 0; j < n; j++) {
-      upperStarts[j + 1] += upperStarts[j];
+      columnStarts[j + 1] += columnStarts[j];
     }
-    int[] next = upperStarts.clone();
-    upperRows = new int[rs.length];
-    upperPlaces = new int[rs.length];
+    int[] at = columnStarts.clone();
+    entrySources = new int[rs.length];
+    entryTargets = new int[rs.length];
     for (int j = 0; j < n; j++) {
       for (int p = cs[j]; p < cs[j + 1]; p++) {
-        int q = next[Math.max(at[j], at[rs[p]])]++;
-        upperRows[q] = Math.min(at[j], at[rs[p]]);
-        upperPlaces[q] = p;
+        int a = places[j];
+        int b = places[rs[p]];
+        int q = at[Math.min(a, b)]++;
+        entrySources[q] = p;
+        entryTargets[q] = Math.max(a, b);
       }
     }
-    parent = new int[n];
-    int[] flag = new int[n];
-    int[] counts = new int[n];
-    Arrays.fill(parent, -1);
-    for (int k = 0; k < n; k++) {
-      flag[k] = k;
-      for (int q = upperStarts[k]; q < upperStarts[k + 1]; q++) {
-        for (int i = upperRows[q]; flag[i] != k; i = parent[i]) {
-          if (parent[i] < 0) {
-            parent[i] = k;
-          }
-          counts[i]++;
-          flag[i] = k;
+    entryStarts = new int[supernodes + 1];
+    rowStarts = new int[supernodes + 1];
+    int[] found = new int[Math.max(16, 8 * supernodes)];
+    int[] mark = new int[n];
+    Arrays.fill(mark, -1);
+    for (int s = 0; s < supernodes; s++) {
+      int end = starts[s + 1];
+      int from = rowStarts[s];
+      int count = from;
+      entryStarts[s + 1] = columnStarts[end];
+      int most = columnStarts[end] - columnStarts[starts[s]];
+      for (int k = childStarts[s]; k < childStarts[s + 1]; k++) {
+        most += rowStarts[children[k] + 1] - rowStarts[children[k]];
+      }
+      most = Math.min(most, n - end);
+      if (count + most > found.length) {
+        found = Arrays.copyOf(found, Math.addExact(count + most, found.length / 2));
+      }
+      for (int q = columnStarts[starts[s]]; q < columnStarts[end]; q++) {
+        int row = entryTargets[q];
+        if (row >= end && mark[row] != s) {
+          mark[row] = s;
+          found[count++] = row;
         }
       }
+      for (int k = childStarts[s]; k < childStarts[s + 1]; k++) {
+        for (int q = rowStarts[children[k]]; q < rowStarts[children[k] + 1]; q++) {
+          int row = found[q];
+          if (row >= end && mark[row] != s) {
+            mark[row] = s;
+            found[count++] = row;
+          }
+        }
+      }
+      Arrays.sort(found, from, count);
+      rowStarts[s + 1] = count;
     }
-    columnStarts = new long[n + 1];
-    for (int j = 0; j < n; j++) {
-      columnStarts[j + 1] = columnStarts[j] + counts[j];
+    rows = Arrays.copyOf(found, rowStarts[supernodes]);
+    relative = new int[rows.length];
+    place(columnStarts);
+  }
+
+  /** Finds the positions of entries and of children's rows in the fronts. */
+  private void place(int[] columnStarts) {
+    int[] local = new int[order.length];
+    for (int s = 0; s < parents.length; s++) {
+      int width = starts[s + 1] - starts[s];
+      int height = height(s);
+      Math.multiplyExact(width, height);
+      for (int j = 0; j < width; j++) {
+        local[starts[s] + j] = j;
+      }
+      for (int q = rowStarts[s]; q < rowStarts[s + 1]; q++) {
+        local[rows[q]] = width + q - rowStarts[s];
+      }
+      for (int j = 0; j < width; j++) {
+        for (int q = columnStarts[starts[s] + j]; q < columnStarts[starts[s] + j + 1]; q++) {
+          entryTargets[q] = j * height + local[entryTargets[q]];
+        }
+      }
+      for (int k = childStarts[s]; k < childStarts[s + 1]; k++) {
+        for (int q = rowStarts[children[k]]; q < rowStarts[children[k] + 1]; q++) {
+          relative[q] = local[rows[q]];
+        }
+      }
     }
   }
 
   /**
-   * Analyses a pattern, every unknown by itself.
+   * Analyses a pattern, every unknown by itself, with the usual settings.
    *
    * @param pattern the pattern of the matrices to be factorized
    */
@@ -94,33 +184,12 @@ public final class SymbolicFactor {
     if (group.length != n) {
       throw new IllegalArgumentException(group.length + " group numbers for " + n + " unknowns");
     }
-    int[] number = new int[n];
-    Arrays.fill(number, -1);
-    int[] dense = new int[n];
-    int groups = 0;
     for (int i = 0; i < n; i++) {
       if (group[i] < 0 || group[i] >= n) {
         throw new IllegalArgumentException("group " + group[i] + " of unknown " + i + " is not from 0 to " + (n - 1));
       }
-      if (number[group[i]] < 0) {
-        number[group[i]] = groups++;
-      }
-      dense[i] = number[group[i]];
     }
-    int[] groupOrder = settings.ordering().order(Graph.of(pattern, dense, groups));
-    int[] rank = Trees.inverse(groupOrder);
-    int[] starts = new int[groups + 1];
-    for (int i = 0; i < n; i++) {
-      starts[rank[dense[i]] + 1]++;
-    }
-    for (int g = 0; g < groups; g++) {
-      starts[g + 1] += starts[g];
-    }
-    int[] order = new int[n];
-    for (int i = 0; i < n; i++) {
-      order[starts[rank[dense[i]]]++] = i;
-    }
-    return new SymbolicFactor(pattern, settings, order);
+    return new SymbolicFactor(pattern, settings, OrderChoice.choose(pattern, group, settings.ordering()));
   }
 
   /** Number of unknowns. */
@@ -140,7 +209,59 @@ public final class SymbolicFactor {
 
   /** Nonzeros of the factor's lower triangle, the diagonal included. */
   public long nonzeros() {
-    return columnStarts[order.length] + order.length;
+    return nonzeros;
+  }
+
+  /** Numbers kept for the factor: its nonzeros, the zeros of merged supernodes and the unused upper triangles of their diagonal blocks. */
+  public long storedNumbers() {
+    long sum = 0;
+    for (int s = 0; s < parents.length; s++) {
+      sum += (long) (starts[s + 1] - starts[s]) * height(s);
+    }
+    return sum + order.length;
+  }
+
+  /** The most numbers held at once while factorizing with one thread: factor and update matrices. */
+  public long peakNumbers() {
+    long now = order.length;
+    long most = now;
+    for (int s = 0; s < parents.length; s++) {
+      now += (long) (starts[s + 1] - starts[s]) * height(s) + update(s);
+      most = Math.max(most, now);
+      for (int k = childStarts[s]; k < childStarts[s + 1]; k++) {
+        now -= update(children[k]);
+      }
+    }
+    return most;
+  }
+
+  /** Multiplications, and as many additions, of a factorization. */
+  public double operations() {
+    return operations;
+  }
+
+  FactorSettings settings() {
+    return settings;
+  }
+
+  int supernodes() {
+    return parents.length;
+  }
+
+  /** Columns of a supernode. */
+  int width(int s) {
+    return starts[s + 1] - starts[s];
+  }
+
+  /** Rows of a supernode's front: its columns and the rows below. */
+  int height(int s) {
+    return starts[s + 1] - starts[s] + rowStarts[s + 1] - rowStarts[s];
+  }
+
+  /** Numbers of a supernode's update matrix. */
+  private long update(int s) {
+    long r = (long) rowStarts[s + 1] - rowStarts[s];
+    return r * (r + 1) / 2;
   }
 
   /**
@@ -151,7 +272,7 @@ public final class SymbolicFactor {
    * @throws IllegalArgumentException if the matrix has another pattern
    */
   public NumericFactor cholesky(SymmetricMatrix matrix) {
-    return NumericFactor.compute(this, checked(matrix), matrix.diagonal(), true, settings.pivotLimit());
+    return NumericFactor.compute(this, checked(matrix), matrix.diagonal(), true);
   }
 
   /**
@@ -163,12 +284,12 @@ public final class SymbolicFactor {
    * @throws IllegalArgumentException if the matrix has another pattern
    */
   public NumericFactor indefinite(SymmetricMatrix matrix) {
-    return NumericFactor.compute(this, checked(matrix), matrix.diagonal(), false, settings.pivotLimit());
+    return NumericFactor.compute(this, checked(matrix), matrix.diagonal(), false);
   }
 
   /**
-   * Factorizes {@code K − shift · M}; pivots are judged against {@code |Kᵢᵢ| + |shift · Mᵢᵢ|}. A breakdown means that the shift meets an
-   * eigenvalue (of the pencil, or of a leading part of it): try another shift nearby.
+   * Factorizes {@code K - shift · M}; pivots are judged against {@code |K[i][i]| + |shift · M[i][i]|}. A breakdown means that the shift meets
+   * an eigenvalue (of the pencil, or of a leading part of it): try another shift nearby.
    *
    * @param k first matrix, its entries within the analysed pattern
    * @param shift the shift
@@ -183,7 +304,7 @@ public final class SymbolicFactor {
       scale[i] = Math.abs(scale[i]) + Math.abs(shift * mass[i]);
     }
     SymmetricMatrix sum = k.on(pattern).plus(-shift, m.on(pattern));
-    return NumericFactor.compute(this, sum, scale, false, settings.pivotLimit());
+    return NumericFactor.compute(this, sum, scale, false);
   }
 
   private SymmetricMatrix checked(SymmetricMatrix matrix) {
