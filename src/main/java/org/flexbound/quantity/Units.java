@@ -1,35 +1,66 @@
 package org.flexbound.quantity;
 
+import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
+import javax.measure.IncommensurableException;
+import tech.units.indriya.AbstractUnit;
 
-/** The table of the spellings of units that people use in load tests and frame models. */
+/** Reads units as people spell them: products, quotients and powers of the table's spellings. */
 public final class Units {
-  private static final Map<String, Unit> TABLE =
-      Map.ofEntries(
-          Map.entry("m", Unit.METRE),
-          Map.entry("mm", new Unit("mm", Dimension.LENGTH, 1e-3, 0)),
-          Map.entry("N", Unit.NEWTON),
-          Map.entry("kN", new Unit("kN", Dimension.FORCE, 1e3, 0)),
-          Map.entry("rad", Unit.RADIAN),
-          Map.entry("kg", new Unit("kg", Dimension.MASS, 1, 0)),
-          Map.entry("GPa", new Unit("GPa", Dimension.STRESS, 1e9, 0)));
-
   private Units() {}
 
   /**
-   * Reads a unit such as {@code mm}, {@code kN/m} or {@code lbf·in/rad}.
+   * Reads a unit such as {@code mm}, {@code kN/m}, {@code mm^4} or {@code lbf·in/rad}.
    *
-   * @param text the spelling, with blanks around it ignored
+   * @param text the spelling, with blanks around it ignored; empty or {@code 1} for a pure number
    * @return the unit
-   * @throws UnitException where nothing in the table matches, with the nearest spellings
+   * @throws UnitException where a piece is not in the table or stands for two units, with the
+   *     nearest spellings
    */
   public static Unit parse(String text) throws UnitException {
-    Unit unit = TABLE.get(text.strip());
-    if (unit == null) {
-      throw new UnitException("'" + text + "' is not a unit that is known here");
+    String trimmed = text.strip();
+    if (trimmed.isEmpty()) {
+      return Unit.ONE;
     }
-    return unit;
+    Unit degrees = TemperatureUnits.find(trimmed);
+    if (degrees != null) {
+      return degrees;
+    }
+    return new UnitExpression(trimmed).unit();
+  }
+
+  /** Turns a unit of the kept library into ours. */
+  static Unit of(String symbol, javax.measure.Unit<?> unit) throws UnitException {
+    Dimension dimension = Dimension.NUMBER;
+    javax.measure.Dimension measured = unit.getDimension();
+    Map<? extends javax.measure.Dimension, Integer> bases = measured.getBaseDimensions();
+    List<Map.Entry<? extends javax.measure.Dimension, Integer>> entries =
+        bases == null ? List.of(Map.entry(measured, 1)) : new ArrayList<>(bases.entrySet());
+    for (Map.Entry<? extends javax.measure.Dimension, Integer> entry : entries) {
+      Dimension base = Spellings.dimension(entry.getKey());
+      for (int k = 0; k < Math.abs(entry.getValue()); k++) {
+        dimension = entry.getValue() > 0 ? dimension.times(base) : dimension.per(base);
+      }
+    }
+    try {
+      double factor = unit.getConverterToAny(unit.getSystemUnit()).convert(1.0);
+      return new Unit(symbol, dimension, factor, 0);
+    } catch (IncommensurableException impossible) {
+      throw new UnitException("'" + symbol + "' has no conversion to SI units");
+    }
+  }
+
+  /** The product of two units of any kind. */
+  static javax.measure.Unit<?> product(javax.measure.Unit<?> left, javax.measure.Unit<?> right) {
+    return left.multiply(right);
+  }
+
+  /** The unit of pure numbers in the kept library. */
+  static javax.measure.Unit<?> one() {
+    return AbstractUnit.ONE;
   }
 
   /**
@@ -40,10 +71,48 @@ public final class Units {
    * @return the spellings
    */
   public static List<String> spellings(Dimension dimension) {
-    return TABLE.entrySet().stream()
-        .filter(entry -> entry.getValue().dimension().equals(dimension))
-        .map(Map.Entry::getKey)
-        .sorted()
+    List<String> offered = new ArrayList<>();
+    for (String spelling : Spellings.OFFERED) {
+      try {
+        if (parse(spelling).dimension().equals(dimension)) {
+          offered.add(spelling);
+        }
+      } catch (UnitException impossible) {
+        throw new IllegalStateException("the table offers what it cannot read", impossible);
+      }
+    }
+    return List.copyOf(offered);
+  }
+
+  /** The spellings nearest to a piece that is not in the table, at most three. */
+  static List<String> nearest(String piece) {
+    return Spellings.TABLE.keySet().stream()
+        .filter(known -> distance(known, piece) <= Math.max(1, piece.length() / 3))
+        .sorted(
+            Comparator.<String>comparingInt(known -> distance(known, piece))
+                .thenComparing(Comparator.naturalOrder()))
+        .limit(3)
         .toList();
+  }
+
+  /** Levenshtein's distance, upper and lower case alike. */
+  private static int distance(String left, String right) {
+    String a = left.toLowerCase(Locale.ROOT);
+    String b = right.toLowerCase(Locale.ROOT);
+    int[] row = new int[b.length() + 1];
+    for (int j = 0; j <= b.length(); j++) {
+      row[j] = j;
+    }
+    for (int i = 1; i <= a.length(); i++) {
+      int diagonal = row[0];
+      row[0] = i;
+      for (int j = 1; j <= b.length(); j++) {
+        int above = row[j];
+        int change = diagonal + (a.charAt(i - 1) == b.charAt(j - 1) ? 0 : 1);
+        row[j] = Math.min(change, Math.min(above, row[j - 1]) + 1);
+        diagonal = above;
+      }
+    }
+    return row[b.length()];
   }
 }
