@@ -10,21 +10,11 @@ import java.nio.file.Path;
 final class WriteMatrices {
   private WriteMatrices() {}
 
-  static LatticeFrame named(String name) {
-    boolean turned = name.endsWith("r");
-    String plain = turned ? name.substring(0, name.length() - 1) : name;
-    if (plain.equals("boom")) {
-      return LatticeFrame.of(2, 2, 4168, turned, true);
-    }
-    int n = Integer.parseInt(plain.substring(1));
-    return LatticeFrame.of(n, n, n, turned, true);
-  }
-
   public static void main(String[] arguments) throws IOException {
     Path folder = Path.of(arguments[0]);
     Files.createDirectories(folder);
     for (int a = 1; a < arguments.length; a++) {
-      SymmetricMatrix k = named(arguments[a]).stiffness;
+      SymmetricMatrix k = LatticeFrame.named(arguments[a]).stiffness;
       int[] starts = k.pattern().columnStarts();
       int[] rows = k.pattern().rows();
       double[] values = k.values();

@@ -9,10 +9,11 @@ package org.flexbound.sparse;
  */
 public record FactorSettings(Ordering ordering, int threads, double pivotLimit) {
   /**
-   * Rounding leaves a true zero pivot some units of the sixteenth digit of its diagonal entry: below this ratio nothing can be told from
-   * zero. Raising it refuses sound but slender structures; lowering it lets mechanisms pass as very soft.
+   * Rounding leaves a pivot that should be zero at some units of the fifteenth digit of its diagonal entry, and more where long levers meet
+   * rotations. Raising the limit refuses soft supports; lowering it lets mechanisms pass as very soft. {@link NumericFactor#leastPivotRatio}
+   * tells how near a factor came to it.
    */
-  public static final double DEFAULT_PIVOT_LIMIT = 1e-14;
+  public static final double DEFAULT_PIVOT_LIMIT = 1e-12;
 
   /** Checks the values. */
   public FactorSettings {

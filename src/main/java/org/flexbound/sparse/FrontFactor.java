@@ -4,7 +4,7 @@ import java.util.Arrays;
 
 /**
  * Partial factorization of dense fronts: {@code L D Lᵀ} of the columns of a supernode, and the update {@code U - L₂₁ D L₂₁ᵀ} of what is below.
- * The panel is column-major, height × width; the update matrix keeps its lower triangle by columns. One object belongs to one thread; loops
+ * The panel is laid out as {@link Panel} says; the update matrix keeps its lower triangle by columns. One object belongs to one thread; loops
  * of large fronts are shared with a {@link Crew}.
  *
  * <p>The columns are halved recursively (to a depth of the logarithm of the width); all work but that on narrow diagonal blocks is done by the
@@ -12,7 +12,7 @@ import java.util.Arrays;
  * Math. Softw. 34 (2008) 12.
  */
 final class FrontFactor {
-  /** Columns factorized by themselves; a multiple of four. */
+  /** Columns factorized by themselves; a multiple of four and a divisor of {@link Panel#BLOCK}. */
   private static final int NARROW = 24;
   /** Depth of a packed strip: a strip of both operands stays in the first levels of cache. */
   private static final int DEPTH = 192;
@@ -62,7 +62,7 @@ final class FrontFactor {
   /**
    * Factorizes a front.
    *
-   * @param panel height × width, column-major; its lower trapezoid becomes L (unit diagonal not stored: the diagonal keeps the pivots)
+   * @param panel height × width; its lower trapezoid becomes L (unit diagonal not stored: the diagonal keeps the pivots)
    * @param update lower triangle of order height - width by columns
    * @param pivots receives the pivots from offset first
    * @param scale original diagonal entries from offset first
@@ -94,22 +94,24 @@ final class FrontFactor {
   /** Factorizes a narrow diagonal block. */
   private static void diagonal(double[] panel, int height, int from, int to, double[] pivots, double[] scale, int first, PivotRule rule)
       throws SmallPivot {
+    int stride = Panel.stride(from, height);
+    int origin = Panel.column(from, height) - from * stride;
     for (int j = from; j < to; j++) {
-      double d = panel[j * height + j];
+      int source = origin + j * stride;
+      double d = panel[source + j];
       if (rule.rejects(d, scale[first + j])) {
         throw new SmallPivot(j, d);
       }
       pivots[first + j] = d;
       for (int k = j + 1; k < to; k++) {
-        double l = panel[j * height + k] / d;
-        int target = k * height;
-        int source = j * height;
+        double l = panel[source + k] / d;
+        int target = origin + k * stride;
         for (int i = k; i < to; i++) {
           panel[target + i] = Math.fma(-l, panel[source + i], panel[target + i]);
         }
       }
       for (int k = j + 1; k < to; k++) {
-        panel[j * height + k] /= d;
+        panel[source + k] /= d;
       }
     }
   }
@@ -120,18 +122,20 @@ final class FrontFactor {
     if (rows == 0) {
       return;
     }
+    int stride = Panel.stride(from, height);
+    int origin = Panel.column(from, height) - from * stride;
     int whole = rows / STRIP;
     double work = (double) rows * (to - from) * (to - from);
     if (work > WORTH_SHARING) {
       int units = (whole + 15) / 16;
       crew.loop(units, worker, (u, w) -> {
         for (int s = 16 * u; s < Math.min(whole, 16 * u + 16); s++) {
-          strip(panel, height, from, to, pivots, first, panel, to + s * STRIP, height);
+          strip(panel, origin, stride, from, to, pivots, first, panel, origin + to + s * STRIP, stride);
         }
       });
     } else {
       for (int s = 0; s < whole; s++) {
-        strip(panel, height, from, to, pivots, first, panel, to + s * STRIP, height);
+        strip(panel, origin, stride, from, to, pivots, first, panel, origin + to + s * STRIP, stride);
       }
     }
     int rest = rows - whole * STRIP;
@@ -140,28 +144,28 @@ final class FrontFactor {
       spare = room(spare, STRIP * NARROW);
       for (int j = from; j < to; j++) {
         int at = (j - from) * STRIP;
-        System.arraycopy(panel, j * height + row, spare, at, rest);
+        System.arraycopy(panel, origin + j * stride + row, spare, at, rest);
         Arrays.fill(spare, at + rest, at + STRIP, 0);
       }
-      strip(panel, height, from, to, pivots, first, spare, -from * STRIP, STRIP);
+      strip(panel, origin, stride, from, to, pivots, first, spare, -from * STRIP, STRIP);
       for (int j = from; j < to; j++) {
-        System.arraycopy(spare, (j - from) * STRIP, panel, j * height + row, rest);
+        System.arraycopy(spare, (j - from) * STRIP, panel, origin + j * stride + row, rest);
       }
     }
   }
 
-  /** One strip of rows, at {@code x[xo + j·xs ..]} for column j. */
-  private void strip(double[] panel, int height, int from, int to, double[] pivots, int first, double[] x, int xo, int xs) {
+  /** One strip of rows, at {@code x[xo + j·xs ..]} for column j; entry (i, j) of the diagonal block is {@code panel[origin + j·stride + i]}. */
+  private void strip(double[] panel, int origin, int stride, int from, int to, double[] pivots, int first, double[] x, int xo, int xs) {
     int j = from;
     for (; j + 4 <= to; j += 4) {
       int c = xo + j * xs;
       if (j > from) {
-        int b = from * height + j;
-        kernel.subtract(x, xo + from * xs, xs, panel, b, b + 1, b + 2, b + 3, height, j - from, x, c, c + xs, c + 2 * xs, c + 3 * xs);
+        int b = origin + from * stride + j;
+        kernel.subtract(x, xo + from * xs, xs, panel, b, b + 1, b + 2, b + 3, stride, j - from, x, c, c + xs, c + 2 * xs, c + 3 * xs);
       }
-      triangle(panel, height, j, j + 4, x, xo, xs, j);
+      triangle(panel, origin, stride, j, j + 4, x, xo, xs, j);
     }
-    triangle(panel, height, j, to, x, xo, xs, from);
+    triangle(panel, origin, stride, j, to, x, xo, xs, from);
     for (int k = from; k < to; k++) {
       double inverse = 1 / pivots[first + k];
       int at = xo + k * xs;
@@ -172,11 +176,11 @@ final class FrontFactor {
   }
 
   /** Takes columns {@code since} and later out of columns from to to. */
-  private static void triangle(double[] panel, int height, int from, int to, double[] x, int xo, int xs, int since) {
+  private static void triangle(double[] panel, int origin, int stride, int from, int to, double[] x, int xo, int xs, int since) {
     for (int j = from; j < to; j++) {
       int target = xo + j * xs;
       for (int k = since; k < j; k++) {
-        double l = -panel[k * height + j];
+        double l = -panel[origin + k * stride + j];
         int source = xo + k * xs;
         for (int i = 0; i < STRIP; i++) {
           x[target + i] = Math.fma(l, x[source + i], x[target + i]);
@@ -224,7 +228,7 @@ final class FrontFactor {
       int rows = Math.min(STRIP, height - row);
       int at = s * STRIP * depth;
       for (int k = k0; k < k1; k++) {
-        System.arraycopy(panel, k * height + row, a, at, rows);
+        System.arraycopy(panel, Panel.column(k, height) + row, a, at, rows);
         if (rows < STRIP) {
           Arrays.fill(a, at + rows, at + STRIP, 0);
         }
@@ -242,7 +246,7 @@ final class FrontFactor {
       int at = g * 4 * depth;
       for (int k = k0; k < k1; k++) {
         double d = pivots[first + k];
-        int source = k * height + row;
+        int source = Panel.column(k, height) + row;
         for (int t = 0; t < rows; t++) {
           b[at + t] = panel[source + t] * d;
         }
@@ -255,27 +259,27 @@ final class FrontFactor {
   }
 
   /**
-   * Columns c0 to c1 - 1 of the trapezoid of {@code order} rows; column j begins at j·stride + offset·(stride + 1) in a panel, or follows the
-   * packed lower triangle if the stride is negative.
+   * Columns c0 to c1 - 1 of the trapezoid of {@code order} rows, which begins at row and column {@code offset} of a panel of the given
+   * height, or is the packed lower triangle if the height is negative.
    */
-  private void unit(double[] a, double[] b, int depth, int order, int c0, int c1, double[] target, int stride, int offset, double[] tile) {
+  private void unit(double[] a, double[] b, int depth, int order, int c0, int c1, double[] target, int height, int offset, double[] tile) {
     for (int row = c0 / STRIP * STRIP; row < order; row += STRIP) {
       int ao = row * depth;
       for (int c = c0; c < c1 && c < row + STRIP; c += 4) {
         int bo = c * depth;
         boolean inside = row >= c + 3 && row + STRIP <= order && c + 4 <= c1;
         if (inside) {
-          int t0 = start(c, order, stride, offset) + row;
-          int t1 = start(c + 1, order, stride, offset) + row;
-          int t2 = start(c + 2, order, stride, offset) + row;
-          int t3 = start(c + 3, order, stride, offset) + row;
+          int t0 = start(c, order, height, offset) + row;
+          int t1 = start(c + 1, order, height, offset) + row;
+          int t2 = start(c + 2, order, height, offset) + row;
+          int t3 = start(c + 3, order, height, offset) + row;
           kernel.subtract(a, ao, STRIP, b, bo, bo + 1, bo + 2, bo + 3, 4, depth, target, t0, t1, t2, t3);
         } else {
           Arrays.fill(tile, 0);
           kernel.subtract(a, ao, STRIP, b, bo, bo + 1, bo + 2, bo + 3, 4, depth, tile, 0, STRIP, 2 * STRIP, 3 * STRIP);
           int end = Math.min(order, row + STRIP);
           for (int t = 0; t < 4 && c + t < c1; t++) {
-            int base = start(c + t, order, stride, offset);
+            int base = start(c + t, order, height, offset);
             int shift = t * STRIP - row;
             for (int i = Math.max(row, c + t); i < end; i++) {
               target[base + i] += tile[shift + i];
@@ -287,11 +291,11 @@ final class FrontFactor {
   }
 
   /** Where row 0 of a column would stand. */
-  private static int start(int column, int order, int stride, int offset) {
-    if (stride < 0) {
+  private static int start(int column, int order, int height, int offset) {
+    if (height < 0) {
       return (int) ((long) column * order - (long) column * (column + 1) / 2);
     }
-    return (column + offset) * stride + offset;
+    return Panel.column(column + offset, height) + offset;
   }
 
   private static double[] room(double[] array, int needed) {

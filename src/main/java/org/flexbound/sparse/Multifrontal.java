@@ -112,7 +112,7 @@ final class Multifrontal {
   private void front(int s, int worker) {
     int width = symbolic.width(s);
     int height = symbolic.height(s);
-    double[] panel = new double[width * height];
+    double[] panel = new double[Math.toIntExact(Panel.size(width, height))];
     int below = height - width;
     double[] update = below == 0 ? EMPTY : new double[Math.toIntExact((long) below * (below + 1) / 2)];
     for (int q = symbolic.entryStarts[s]; q < symbolic.entryStarts[s + 1]; q++) {
@@ -158,7 +158,7 @@ final class Multifrontal {
       int base;
       if (column < width) {
         target = panel;
-        base = column * height;
+        base = Panel.column(column, height);
       } else {
         int c = column - width;
         target = update;

@@ -9,16 +9,32 @@ public final class NumericFactor {
   private final double[][] panels;
   private final double[] pivots;
   private final DenseKernel kernel;
+  private final int softest;
+  private final double leastRatio;
 
-  NumericFactor(SymbolicFactor symbolic, double[][] panels, double[] pivots, DenseKernel kernel) {
+  private NumericFactor(SymbolicFactor symbolic, double[][] panels, double[] pivots, double[] scale, DenseKernel kernel) {
     this.symbolic = symbolic;
     this.panels = panels;
     this.pivots = pivots;
     this.kernel = kernel;
+    int at = -1;
+    double least = Double.POSITIVE_INFINITY;
+    for (int k = 0; k < pivots.length; k++) {
+      double ratio = Math.abs(pivots[k]) / Math.abs(scale[symbolic.order[k]]);
+      if (ratio < least) {
+        least = ratio;
+        at = symbolic.order[k];
+      }
+    }
+    softest = at;
+    leastRatio = least;
   }
 
   static NumericFactor compute(SymbolicFactor symbolic, SymmetricMatrix matrix, double[] scale, boolean definite) {
-    DenseKernel kernel = DenseKernel.fastest();
+    return compute(symbolic, matrix, scale, definite, DenseKernel.fastest());
+  }
+
+  static NumericFactor compute(SymbolicFactor symbolic, SymmetricMatrix matrix, double[] scale, boolean definite, DenseKernel kernel) {
     FrontFactor.PivotRule rule = new FrontFactor.PivotRule(definite, symbolic.settings().pivotLimit());
     int threads = symbolic.settings().threads();
     Multifrontal process = new Multifrontal(symbolic, matrix, scale, rule, kernel, threads);
@@ -32,7 +48,7 @@ public final class NumericFactor {
       process = new Multifrontal(symbolic, matrix, scale, rule, kernel, 1);
       process.run();
     }
-    return new NumericFactor(symbolic, process.panels(), process.pivots(), kernel);
+    return new NumericFactor(symbolic, process.panels(), process.pivots(), scale, kernel);
   }
 
   /** Number of unknowns. */
@@ -52,6 +68,19 @@ public final class NumericFactor {
       byUnknown[symbolic.order[k]] = pivots[k];
     }
     return byUnknown;
+  }
+
+  /**
+   * The least ratio of a pivot's size to its own original diagonal entry (for a shifted pencil: to the sum of both diagonals' sizes): how near
+   * the matrix came to a breakdown. Infinite for a matrix without unknowns.
+   */
+  public double leastPivotRatio() {
+    return leastRatio;
+  }
+
+  /** The unknown with the least ratio of pivot to diagonal, -1 for a matrix without unknowns. */
+  public int leastPivotUnknown() {
+    return softest;
   }
 
   /** Number of negative pivots: the number of negative eigenvalues of the matrix. */

@@ -14,7 +14,7 @@ final class SupernodeTree {
   /** Merged supernodes up to so many columns may hold the part of zeros beside it; wider ones that of the last. */
   private static final int[] WIDTHS = {8, 16, 48};
 
-  private static final double[] ZEROS = {0.8, 0.35, 0.1, 0.04};
+  private static final double[] ZEROS = {0.2, 0.15, 0.1, 0.05};
 
   private final int[] firstColumn;
   private final int[] parent;

@@ -137,7 +137,7 @@ public final class SymbolicFactor {
     for (int s = 0; s < parents.length; s++) {
       int width = starts[s + 1] - starts[s];
       int height = height(s);
-      Math.multiplyExact(width, height);
+      Math.toIntExact(Panel.size(width, height));
       for (int j = 0; j < width; j++) {
         local[starts[s] + j] = j;
       }
@@ -145,8 +145,9 @@ public final class SymbolicFactor {
         local[rows[q]] = width + q - rowStarts[s];
       }
       for (int j = 0; j < width; j++) {
+        int base = Panel.column(j, height);
         for (int q = columnStarts[starts[s] + j]; q < columnStarts[starts[s] + j + 1]; q++) {
-          entryTargets[q] = j * height + local[entryTargets[q]];
+          entryTargets[q] = base + local[entryTargets[q]];
         }
       }
       for (int k = childStarts[s]; k < childStarts[s + 1]; k++) {
@@ -216,7 +217,7 @@ public final class SymbolicFactor {
   public long storedNumbers() {
     long sum = 0;
     for (int s = 0; s < parents.length; s++) {
-      sum += (long) (starts[s + 1] - starts[s]) * height(s);
+      sum += Panel.size(width(s), height(s));
     }
     return sum + order.length;
   }
@@ -226,7 +227,7 @@ public final class SymbolicFactor {
     long now = order.length;
     long most = now;
     for (int s = 0; s < parents.length; s++) {
-      now += (long) (starts[s + 1] - starts[s]) * height(s) + update(s);
+      now += Panel.size(width(s), height(s)) + update(s);
       most = Math.max(most, now);
       for (int k = childStarts[s]; k < childStarts[s + 1]; k++) {
         now -= update(children[k]);

@@ -141,30 +141,40 @@ final class TriangularSolve {
       int j = 0;
       for (; j + 4 <= width; j += 4) {
         int c = own + j * BLOCK;
-        kernel.subtract(x, own, BLOCK, panel, j, j + 1, j + 2, j + 3, height, j, x, c, c + BLOCK, c + 2 * BLOCK, c + 3 * BLOCK);
-        for (int t = 1; t < 4; t++) {
-          for (int k = 0; k < t; k++) {
-            subtractRow(x, own + (j + k) * BLOCK, panel[(j + k) * height + j + t], c + t * BLOCK);
+        subtractColumns(panel, height, j, j, x, own, c, c + BLOCK, c + 2 * BLOCK, c + 3 * BLOCK);
+        for (int k = 0; k < 3; k++) {
+          int p = Panel.column(j + k, height) + j;
+          for (int t = k + 1; t < 4; t++) {
+            subtractRow(x, c + k * BLOCK, panel[p + t], c + t * BLOCK);
           }
         }
       }
       for (; j < width; j++) {
         for (int k = 0; k < j; k++) {
-          subtractRow(x, own + k * BLOCK, panel[k * height + j], own + j * BLOCK);
+          subtractRow(x, own + k * BLOCK, panel[Panel.column(k, height) + j], own + j * BLOCK);
         }
       }
       int[] rows = symbolic.rows;
       int at = symbolic.rowStarts[s] - width;
       for (j = width; j + 4 <= height; j += 4) {
-        kernel.subtract(x, own, BLOCK, panel, j, j + 1, j + 2, j + 3, height, width, x, rows[at + j] * BLOCK, rows[at + j + 1] * BLOCK,
-            rows[at + j + 2] * BLOCK, rows[at + j + 3] * BLOCK);
+        subtractColumns(panel, height, j, width, x, own, rows[at + j] * BLOCK, rows[at + j + 1] * BLOCK, rows[at + j + 2] * BLOCK,
+            rows[at + j + 3] * BLOCK);
       }
       for (; j < height; j++) {
         int target = rows[at + j] * BLOCK;
         for (int k = 0; k < width; k++) {
-          subtractRow(x, own + k * BLOCK, panel[k * height + j], target);
+          subtractRow(x, own + k * BLOCK, panel[Panel.column(k, height) + j], target);
         }
       }
+    }
+  }
+
+  /** Takes the first {@code depth} columns of a panel out of four rows of the right-hand sides. */
+  private void subtractColumns(double[] panel, int height, int row, int depth, double[] x, int own, int c0, int c1, int c2, int c3) {
+    for (int k = 0; k < depth; k += Panel.BLOCK) {
+      int b = Panel.column(k, height) + row;
+      kernel.subtract(x, own + k * BLOCK, BLOCK, panel, b, b + 1, b + 2, b + 3, Panel.stride(k, height), Math.min(Panel.BLOCK, depth - k), x,
+          c0, c1, c2, c3);
     }
   }
 
@@ -200,25 +210,30 @@ final class TriangularSolve {
       int j = width - 4;
       for (; j >= 0; j -= 4) {
         int c = own + j * BLOCK;
-        int b = j * height + width;
-        kernel.subtract(gathered, 0, BLOCK, panel, b, b + height, b + 2 * height, b + 3 * height, 1, below, x, c, c + BLOCK, c + 2 * BLOCK,
+        int b0 = Panel.column(j, height);
+        int b1 = Panel.column(j + 1, height);
+        int b2 = Panel.column(j + 2, height);
+        int b3 = Panel.column(j + 3, height);
+        kernel.subtract(gathered, 0, BLOCK, panel, b0 + width, b1 + width, b2 + width, b3 + width, 1, below, x, c, c + BLOCK, c + 2 * BLOCK,
             c + 3 * BLOCK);
-        b = j * height + j + 4;
-        kernel.subtract(x, c + 4 * BLOCK, BLOCK, panel, b, b + height, b + 2 * height, b + 3 * height, 1, width - j - 4, x, c, c + BLOCK,
+        int next = j + 4;
+        kernel.subtract(x, c + 4 * BLOCK, BLOCK, panel, b0 + next, b1 + next, b2 + next, b3 + next, 1, width - next, x, c, c + BLOCK,
             c + 2 * BLOCK, c + 3 * BLOCK);
         for (int t = 2; t >= 0; t--) {
+          int p = Panel.column(j + t, height) + j;
           for (int k = t + 1; k < 4; k++) {
-            subtractRow(x, c + k * BLOCK, panel[(j + t) * height + j + k], c + t * BLOCK);
+            subtractRow(x, c + k * BLOCK, panel[p + k], c + t * BLOCK);
           }
         }
       }
       for (j += 3; j >= 0; j--) {
         int target = own + j * BLOCK;
+        int p = Panel.column(j, height);
         for (int r = 0; r < below; r++) {
-          subtractRow(x, gathered, r * BLOCK, panel[j * height + width + r], target);
+          subtractRow(x, gathered, r * BLOCK, panel[p + width + r], target);
         }
         for (int k = j + 1; k < width; k++) {
-          subtractRow(x, own + k * BLOCK, panel[j * height + k], target);
+          subtractRow(x, own + k * BLOCK, panel[p + k], target);
         }
       }
     }
@@ -243,22 +258,23 @@ final class TriangularSolve {
       Arrays.fill(sum, 0, height, 0);
       int j = 0;
       for (; j + 4 <= width; j += 4) {
-        int p = j * height;
+        int p = Panel.column(j, height);
+        int stride = Panel.stride(j, height);
         double x0 = x[first + j] - sum[j];
         double x1 = x[first + j + 1] - sum[j + 1] - panel[p + j + 1] * x0;
-        double x2 = x[first + j + 2] - sum[j + 2] - panel[p + j + 2] * x0 - panel[p + height + j + 2] * x1;
-        double x3 = x[first + j + 3] - sum[j + 3] - panel[p + j + 3] * x0 - panel[p + height + j + 3] * x1
-            - panel[p + 2 * height + j + 3] * x2;
+        double x2 = x[first + j + 2] - sum[j + 2] - panel[p + j + 2] * x0 - panel[p + stride + j + 2] * x1;
+        double x3 = x[first + j + 3] - sum[j + 3] - panel[p + j + 3] * x0 - panel[p + stride + j + 3] * x1
+            - panel[p + 2 * stride + j + 3] * x2;
         x[first + j] = x0;
         x[first + j + 1] = x1;
         x[first + j + 2] = x2;
         x[first + j + 3] = x3;
-        addFour(panel, p, height, j + 4, x0, x1, x2, x3, sum);
+        addFour(panel, p, stride, j + 4, height, x0, x1, x2, x3, sum);
       }
       for (; j < width; j++) {
         double xj = x[first + j] - sum[j];
         x[first + j] = xj;
-        int p = j * height;
+        int p = Panel.column(j, height);
         for (int i = j + 1; i < height; i++) {
           sum[i] = Math.fma(panel[p + i], xj, sum[i]);
         }
@@ -270,10 +286,10 @@ final class TriangularSolve {
     }
   }
 
-  private static void addFour(double[] panel, int p0, int height, int from, double x0, double x1, double x2, double x3, double[] sum) {
-    int p1 = p0 + height;
-    int p2 = p1 + height;
-    int p3 = p2 + height;
+  private static void addFour(double[] panel, int p0, int stride, int from, int height, double x0, double x1, double x2, double x3, double[] sum) {
+    int p1 = p0 + stride;
+    int p2 = p1 + stride;
+    int p3 = p2 + stride;
     for (int i = from; i < height; i++) {
       sum[i] = Math.fma(panel[p3 + i], x3, Math.fma(panel[p2 + i], x2, Math.fma(panel[p1 + i], x1, Math.fma(panel[p0 + i], x0, sum[i]))));
     }
@@ -295,7 +311,7 @@ final class TriangularSolve {
         gathered[i] = x[symbolic.rows[at + i]];
       }
       for (int j = width - 1; j >= 0; j--) {
-        double sum = dot(panel, j * height, gathered, j + 1, height);
+        double sum = dot(panel, Panel.column(j, height), gathered, j + 1, height);
         gathered[j] = x[first + j] / pivots[first + j] - sum;
         x[first + j] = gathered[j];
       }

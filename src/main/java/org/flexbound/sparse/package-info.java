@@ -6,7 +6,8 @@
  * are ordered together).
  *
  * <p><b>Out:</b> the factor of the matrix ({@link org.flexbound.sparse.NumericFactor}), solutions for dense or sparse right-hand sides,
- * the inertia of an indefinite matrix.
+ * the inertia of an indefinite matrix, and the lowest eigenpairs of {@code K phi = lambda M phi}
+ * ({@link org.flexbound.sparse.EigenSolver}).
  *
  * <p><b>Units and signs:</b> none of its own; every threshold compares a number with another of the same unit (a pivot with its own
  * original diagonal entry), so that no choice of units changes a verdict.
@@ -17,9 +18,9 @@
  *     ({@link org.flexbound.sparse.Ordering});</li>
  * <li>analyse: elimination tree, postorder, column counts, pattern of the factor ({@link org.flexbound.sparse.SymbolicFactor}), kept for
  *     every later set of values on the same pattern;</li>
- * <li>factorize: {@code P A Pᵀ = L Lᵀ} for positive definite, {@code L D Lᵀ} for indefinite matrices;</li>
+ * <li>factorize: {@code P A Pᵀ = L D Lᵀ}, all pivots D positive for a positive definite matrix, of both signs for an indefinite one;</li>
  * <li>solve: forward and backward with many right-hand sides at once, or only the part of the tree which a sparse right-hand side
- *     reaches and the wanted rows need.</li>
+ *     reaches and the wanted rows need; refine on request ({@link org.flexbound.sparse.Refinement}).</li>
  * </ol>
  *
  * <p>Everything is deterministic: the same input gives the same bytes on the same machine, for any number of threads.

@@ -31,6 +31,43 @@ final class LatticeFrame {
   }
 
   /**
+   * A lattice by name: {@code n12} is a cube of 12 nodes a side, {@code boom} 2 × 2 × 4168 nodes; an r at the end turns it.
+   *
+   * <p>Entries that are zero are left out of the patterns, as they are in the files the native reference reads.
+   */
+  static LatticeFrame named(String name) {
+    boolean turned = name.endsWith("r");
+    String plain = turned ? name.substring(0, name.length() - 1) : name;
+    LatticeFrame frame;
+    if (plain.equals("boom")) {
+      frame = of(2, 2, 4168, turned, true);
+    } else {
+      int n = Integer.parseInt(plain.substring(1));
+      frame = of(n, n, n, turned, true);
+    }
+    return new LatticeFrame(withoutZeros(frame.stiffness), withoutZeros(frame.mass), frame.group);
+  }
+
+  private static SymmetricMatrix withoutZeros(SymmetricMatrix matrix) {
+    int n = matrix.size();
+    int[] starts = matrix.pattern().columnStarts();
+    int[] rows = matrix.pattern().rows();
+    double[] values = matrix.values();
+    int[] keptStarts = new int[n + 1];
+    int count = 0;
+    for (int j = 0; j < n; j++) {
+      for (int p = starts[j]; p < starts[j + 1]; p++) {
+        if (rows[p] == j || values[p] != 0) {
+          rows[count] = rows[p];
+          values[count++] = values[p];
+        }
+      }
+      keptStarts[j + 1] = count;
+    }
+    return SymmetricMatrix.of(SparsePattern.of(keptStarts, Arrays.copyOf(rows, count)), Arrays.copyOf(values, count));
+  }
+
+  /**
    * A lattice.
    *
    * @param turned whether all triples are turned by the rotation vector (0.4, 0.7, -0.3)
