@@ -32,7 +32,7 @@ public final class FrameWriter {
     model.materials().forEach(
         (name, material) -> {
           Map<String, Json> factors = new LinkedHashMap<>();
-          if (!material.factor().equals(StiffnessSetting.NOMINAL)) {
+          if (!material.factor().equals(StiffnessSetting.nominal())) {
             factors.put("E", value(material.factor(), Measure.STRESS, SpringReader.RIGID));
           }
           set(top, "materials", name, factors);

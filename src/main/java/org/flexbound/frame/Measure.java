@@ -21,6 +21,7 @@ enum Measure {
   BENDING_STIFFNESS(
       Dimension.FORCE.times(Dimension.AREA), 2, 1, 0, 0, "a bending or torsional stiffness");
 
+  @SuppressWarnings("ImmutableEnumChecker") // a record of whole numbers
   private final Dimension dimension;
   private final int length;
   private final int force;

@@ -55,7 +55,7 @@ public record Member(
    * @return the setting, nominal where there is none
    */
   public StiffnessSetting factor(Rigidity rigidity) {
-    return factors.getOrDefault(rigidity, StiffnessSetting.NOMINAL);
+    return factors.getOrDefault(rigidity, StiffnessSetting.nominal());
   }
 
   Member withFactors(Map<Rigidity, StiffnessSetting> next) {

@@ -290,8 +290,8 @@ final class PartReader {
       if (mass.isPresent() && mass.getAsDouble() < 0) {
         entries.add(FrameFinding.OUT_OF_RANGE, entry.where(), "a mass is not negative");
       }
-      double[][] inertia =
-          entry.get("inertia").map(this::inertia).orElseGet(() -> new double[3][3]);
+      List<Vector> inertia =
+          entry.get("inertia").map(this::inertia).orElseGet(() -> diagonal(Vector.ZERO));
       Vector offset = entries.vector(entry, "offset", Measure.LENGTH).orElse(Vector.ZERO);
       if (node.isPresent() && mass.isPresent()) {
         result.add(
@@ -302,38 +302,25 @@ final class PartReader {
   }
 
   /** One number, three numbers on the diagonal, or three rows of three. */
-  private double[][] inertia(Json value) {
-    double[][] result = new double[3][3];
+  private List<Vector> inertia(Json value) {
     if (value instanceof Json.Items items
         && items.items().size() == 3
         && items.items().get(0) instanceof Json.Items) {
-      for (int row = 0; row < 3; row++) {
-        Optional<Vector> line = entries.vector(items.items().get(row), Measure.INERTIA);
-        if (line.isPresent()) {
-          result[row] = new double[] {line.get().x(), line.get().y(), line.get().z()};
-        }
+      List<Vector> rows = new ArrayList<>();
+      for (Json row : items.items()) {
+        rows.add(entries.vector(row, Measure.INERTIA).orElse(Vector.ZERO));
       }
-      return result;
+      return rows;
     }
     if (value instanceof Json.Items) {
-      entries
-          .vector(value, Measure.INERTIA)
-          .ifPresent(
-              v -> {
-                result[0][0] = v.x();
-                result[1][1] = v.y();
-                result[2][2] = v.z();
-              });
-      return result;
+      return diagonal(entries.vector(value, Measure.INERTIA).orElse(Vector.ZERO));
     }
-    entries
-        .number(value, Measure.INERTIA)
-        .ifPresent(
-            number -> {
-              for (int i = 0; i < 3; i++) {
-                result[i][i] = number;
-              }
-            });
-    return result;
+    double number = entries.number(value, Measure.INERTIA).orElse(0);
+    return diagonal(new Vector(number, number, number));
+  }
+
+  private static List<Vector> diagonal(Vector d) {
+    return List.of(
+        new Vector(d.x(), 0, 0), new Vector(0, d.y(), 0), new Vector(0, 0, d.z()));
   }
 }

@@ -1,6 +1,6 @@
 package org.flexbound.frame;
 
-import java.util.Arrays;
+import java.util.List;
 import org.flexbound.finding.Where;
 import org.flexbound.setup.Vector;
 
@@ -9,38 +9,18 @@ import org.flexbound.setup.Vector;
  *
  * @param node the node's name
  * @param mass kg
- * @param inertia about its own centre of mass, global axes, 3 × 3, kg·m² (products of inertia with
- *     the sign of the inertia tensor)
+ * @param inertia the three rows of the inertia tensor about its own centre of mass, global axes,
+ *     kg·m²
  * @param offset from the node to the centre of mass, m, global axes
  * @param where its place in the user's file
  */
-public record PointMass(String node, double mass, double[][] inertia, Vector offset, Where where) {
-  /** Copies the matrix. */
+public record PointMass(
+    String node, double mass, List<Vector> inertia, Vector offset, Where where) {
+  /** Copies the list; three rows. */
   public PointMass {
-    inertia = copy(inertia);
-  }
-
-  @Override
-  public double[][] inertia() {
-    return copy(inertia);
-  }
-
-  @Override
-  public boolean equals(Object other) {
-    return other instanceof PointMass that
-        && node.equals(that.node)
-        && mass == that.mass
-        && Arrays.deepEquals(inertia, that.inertia)
-        && offset.equals(that.offset)
-        && where.equals(that.where);
-  }
-
-  @Override
-  public int hashCode() {
-    return 31 * node.hashCode() + Arrays.deepHashCode(inertia);
-  }
-
-  private static double[][] copy(double[][] matrix) {
-    return Arrays.stream(matrix).map(double[]::clone).toArray(double[][]::new);
+    inertia = List.copyOf(inertia);
+    if (inertia.size() != 3) {
+      throw new IllegalArgumentException("an inertia has three rows, not " + inertia.size());
+    }
   }
 }

@@ -50,8 +50,13 @@ public enum Shape {
   }
 
   private final String key;
+  @SuppressWarnings("ImmutableEnumChecker") // an unmodifiable list
   private final List<String> needed;
+
+  @SuppressWarnings("ImmutableEnumChecker") // an unmodifiable list
   private final List<String> optional;
+
+  @SuppressWarnings("ImmutableEnumChecker") // a pure function
   private final Formula formula;
 
   Shape(String key, List<String> needed, List<String> optional, Formula formula) {

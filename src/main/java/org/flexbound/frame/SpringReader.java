@@ -194,7 +194,7 @@ final class SpringReader {
   StiffnessSetting materialFactor(Json.Members owner, String ownerName) {
     Optional<Json.Members> factors = entries.members(owner, "factors");
     if (factors.isEmpty()) {
-      return StiffnessSetting.NOMINAL;
+      return StiffnessSetting.nominal();
     }
     entries.refuseOtherKeys(factors.get(), "the factors of " + ownerName, List.of("E"));
     return factors
@@ -207,7 +207,7 @@ final class SpringReader {
                     || (setting instanceof StiffnessSetting.Value value
                         && value.stiffness() > 0
                         && Double.isFinite(value.stiffness())))
-        .orElse(StiffnessSetting.NOMINAL);
+        .orElse(StiffnessSetting.nominal());
   }
 
   /** A number is a multiple of the nominal stiffness, a text the stiffness in its place. */

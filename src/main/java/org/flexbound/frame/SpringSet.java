@@ -97,7 +97,7 @@ public final class SpringSet {
    * @return the setting, nominal where there is none
    */
   public StiffnessSetting factor(Spring spring) {
-    return factors.getOrDefault(spring, StiffnessSetting.NOMINAL);
+    return factors.getOrDefault(spring, StiffnessSetting.nominal());
   }
 
   /**

@@ -33,6 +33,7 @@ public record StiffnessPath(Group group, String name, String component)
     /** Materials: E, which carries G with it at constant Poisson's ratio. */
     MATERIALS(List.of("E"));
 
+    @SuppressWarnings("ImmutableEnumChecker") // an unmodifiable list
     private final List<String> components;
 
     Group(List<String> components) {

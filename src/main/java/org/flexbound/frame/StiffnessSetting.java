@@ -2,8 +2,14 @@ package org.flexbound.frame;
 
 /** What a stiffness of the model is set to. */
 public sealed interface StiffnessSetting {
-  /** The stiffness as the model has it. */
-  StiffnessSetting NOMINAL = new Factor(1);
+  /**
+   * The stiffness as the model has it.
+   *
+   * @return the factor 1
+   */
+  static StiffnessSetting nominal() {
+    return new Factor(1);
+  }
 
   /**
    * The stiffness that results.
