@@ -1,0 +1,35 @@
+package org.flexbound.report.results;
+
+import java.util.List;
+
+/**
+ * The load-deflection curve of one gauge in one run.
+ *
+ * @param configuration the configuration
+ * @param run the run
+ * @param gauge the gauge
+ * @param load the load
+ * @param slope fitted motion per unit load, SI
+ * @param slopeUncertainty standard uncertainty of the slope from its own residuals
+ * @param lines the fitted lines: the slope with an intercept for each branch and cycle
+ * @param fitFrom lower end of the fit range, N or N·m
+ * @param fitTo upper end of the fit range, N or N·m
+ * @param points the load steps in order
+ */
+public record Curve(
+    String configuration,
+    String run,
+    String gauge,
+    String load,
+    double slope,
+    double slopeUncertainty,
+    List<Line> lines,
+    double fitFrom,
+    double fitTo,
+    List<CurvePoint> points) {
+  /** Copies the lists. */
+  public Curve {
+    lines = List.copyOf(lines);
+    points = List.copyOf(points);
+  }
+}
