@@ -93,6 +93,17 @@ public enum UnitSystem {
   }
 
   /**
+   * The SI unit of a motion per load.
+   *
+   * @param motion the SI unit of the motion: m, rad or 1
+   * @param load the SI unit of the load: N or N·m
+   * @return such as {@code m/N} or {@code rad/(N·m)}
+   */
+  public static String per(String motion, String load) {
+    return motion + "/" + (load.equals("N") ? "N" : "(" + load + ")");
+  }
+
+  /**
    * How the system is named on the command line.
    *
    * @return such as {@code mm-kn}

@@ -14,7 +14,8 @@ import java.util.OptionalDouble;
  * @param temperature temperature, K
  * @param used false where it was left out
  * @param loads the loads that were varied
- * @param peakLoad largest load reached, N or N·m
+ * @param peakLoad largest load reached, in loadUnit
+ * @param loadUnit the SI unit of the load: N or N·m
  * @param steps number of held load steps
  * @param cycles number of load cycles
  * @param remark the remark of the log
@@ -30,6 +31,7 @@ public record Run(
     boolean used,
     List<String> loads,
     OptionalDouble peakLoad,
+    String loadUnit,
     int steps,
     int cycles,
     String remark,
