@@ -3,19 +3,25 @@ package org.flexbound.report.figures;
 import java.awt.Dimension;
 import java.awt.Shape;
 import java.awt.geom.Rectangle2D;
-import java.io.IOException;
 import java.io.StringWriter;
-import java.io.UncheckedIOException;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import javax.xml.parsers.DocumentBuilderFactory;
 import javax.xml.parsers.ParserConfigurationException;
+import javax.xml.transform.OutputKeys;
+import javax.xml.transform.Transformer;
+import javax.xml.transform.TransformerException;
+import javax.xml.transform.TransformerFactory;
+import javax.xml.transform.dom.DOMSource;
+import javax.xml.transform.stream.StreamResult;
 import org.apache.batik.svggen.SVGGeneratorContext;
 import org.apache.batik.svggen.SVGGraphics2D;
 import org.apache.batik.svggen.SVGIDGenerator;
 import org.w3c.dom.Document;
 import org.w3c.dom.Element;
+import org.w3c.dom.Node;
+import org.w3c.dom.Text;
 
 /**
  * Turns what is drawn with Java 2D into one {@code svg} element that can stand in a page beside
@@ -24,6 +30,11 @@ import org.w3c.dom.Element;
  */
 final class Drawing {
   private static final String SVG = "http://www.w3.org/2000/svg";
+
+  private static final List<String> DEFAULTS =
+      List.of(
+          "color-interpolation", "color-rendering", "image-rendering", "shape-rendering",
+          "text-rendering", "stroke-dashoffset", "xml:space", "font-style");
 
   private final String id;
   private final int width;
@@ -67,14 +78,47 @@ final class Drawing {
     painter.paint(canvas, new Rectangle2D.Double(0, 0, width, height));
     Element root = canvas.getRoot();
     describe(root, title, description);
-    StringWriter text = new StringWriter();
-    try {
-      canvas.stream(root, text, false, false);
-    } catch (IOException impossible) {
-      throw new UncheckedIOException(impossible);
+    trim(root);
+    return write(root);
+  }
+
+  /** Takes out what says the same twice: a page may hold hundreds of figures. */
+  private void trim(Element element) {
+    if (element.getAttribute("clip-path").equals("url(#" + id + "-clipPath1)")) {
+      // The first clip is the whole canvas, which the svg element clips to by itself.
+      element.removeAttribute("clip-path");
     }
-    String result = text.toString();
-    return result.substring(result.indexOf("<svg")).replace("\r\n", "\n").strip();
+    for (String name : DEFAULTS) {
+      element.removeAttribute(name);
+    }
+    if (element.getAttribute("font-family").equals("'" + Palette.FAMILY + "'")) {
+      element.removeAttribute("font-family");
+    }
+    if (element.getAttribute("id").equals("genericDefs")) {
+      element.removeAttribute("id");
+    }
+    Node child = element.getFirstChild();
+    while (child != null) {
+      Node next = child.getNextSibling();
+      if (child instanceof Element inner) {
+        trim(inner);
+      } else if (child instanceof Text text) {
+        text.setData(XmlText.clean(text.getData()));
+      }
+      child = next;
+    }
+  }
+
+  private static String write(Element root) {
+    try {
+      Transformer transformer = TransformerFactory.newInstance().newTransformer();
+      transformer.setOutputProperty(OutputKeys.OMIT_XML_DECLARATION, "yes");
+      StringWriter text = new StringWriter();
+      transformer.transform(new DOMSource(root), new StreamResult(text));
+      return text.toString().replace("\r\n", "\n");
+    } catch (TransformerException impossible) {
+      throw new IllegalStateException("a figure could not be written", impossible);
+    }
   }
 
   private void describe(Element root, String title, String description) {

@@ -82,7 +82,7 @@ public final class FlexibilityPicture {
                     largest.getOrDefault(c.unit(), 1.0));
               }
             });
-    return new Figure(id, heading, caption, svg);
+    return new Figure(id, heading, caption, width, height, svg);
   }
 
   private static void grid(Graphics2D canvas, List<String> gauges, List<String> loads) {

@@ -56,9 +56,11 @@ public final class LoadDeflectionFigures {
       String key = curve.configuration() + "\u0000" + curve.gauge() + "\u0000" + curve.load();
       together.computeIfAbsent(key, unused -> new ArrayList<>()).add(curve);
     }
+    // Loading and unloading of a run are thinned each by itself.
+    Thinning thinning = new Thinning(2 * curves.size());
     List<Figure> figures = new ArrayList<>();
     for (List<Curve> group : together.values()) {
-      figures.add(draw("curve-" + (figures.size() + 1), group));
+      figures.add(draw("curve-" + (figures.size() + 1), group, thinning));
     }
     return figures;
   }
@@ -66,7 +68,7 @@ public final class LoadDeflectionFigures {
   /** A series as it stands in the plot: the points behind it. */
   private record Plotted(Curve curve, List<CurvePoint> points) {}
 
-  private Figure draw(String id, List<Curve> runs) {
+  private Figure draw(String id, List<Curve> runs, Thinning thinning) {
     Curve first = runs.get(0);
     String loadUnit = first.loadUnit();
     String motionUnit = first.motionUnit();
@@ -81,7 +83,7 @@ public final class LoadDeflectionFigures {
       Curve curve = runs.get(run);
       for (Kind kind : Kind.values()) {
         List<CurvePoint> some =
-            Thinning.thin(curve.points().stream().filter(kind::holds).toList());
+            thinning.thin(curve.points().stream().filter(kind::holds).toList());
         if (some.isEmpty()) {
           continue;
         }
@@ -164,7 +166,7 @@ public final class LoadDeflectionFigures {
                 }
               }
             });
-    return new Figure(id, heading, caption, svg);
+    return new Figure(id, heading, caption, WIDTH, HEIGHT, svg);
   }
 
   private String caption(List<Curve> runs) {

@@ -100,7 +100,7 @@ public final class StructureFigures {
             + " gauges). Orange arrows: loads. Small white circles: joints; crosses: supports."
             + " In the web page the structure can be turned with the mouse or the arrow keys.";
     return Optional.of(
-        new Figure("structure", heading, caption, drawing.svg(heading, caption)));
+        new Figure("structure", heading, caption, WIDTH, HEIGHT, drawing.svg(heading, caption)));
   }
 
   /**
@@ -150,7 +150,7 @@ public final class StructureFigures {
             + " "
             + units.symbol(unit)
             + "; rotations and strains are not drawn.";
-    return Optional.of(new Figure(id, heading, caption, drawing.svg(heading, caption)));
+    return Optional.of(new Figure(id, heading, caption, WIDTH, HEIGHT, drawing.svg(heading, caption)));
   }
 
   private Optional<Comparison> comparison(Coefficient c) {

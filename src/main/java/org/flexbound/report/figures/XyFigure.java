@@ -44,7 +44,7 @@ final class XyFigure {
                 drawing.spot(new Rectangle2D.Double(x, y, 0, 0), note.text());
               }
             });
-    return new Figure(id, heading, caption, svg);
+    return new Figure(id, heading, caption, width, height, svg);
   }
 
   private static RectangleEdge domainEdge(XYPlot plot) {
