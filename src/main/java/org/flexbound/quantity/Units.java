@@ -32,6 +32,21 @@ public final class Units {
     return new UnitExpression(trimmed).unit();
   }
 
+  /**
+   * A unit that is certainly in the table, for use in the program itself.
+   *
+   * @param text the spelling
+   * @return the unit
+   * @throws IllegalArgumentException where the spelling is not in the table
+   */
+  public static Unit known(String text) {
+    try {
+      return parse(text);
+    } catch (UnitException unknown) {
+      throw new IllegalArgumentException(unknown);
+    }
+  }
+
   /** Turns a unit of the kept library into ours. */
   static Unit of(String symbol, javax.measure.Unit<?> unit) throws UnitException {
     Dimension dimension = Dimension.NUMBER;

@@ -1,0 +1,215 @@
+package org.flexbound.testlog;
+
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import org.flexbound.document.EntryTable;
+import org.flexbound.finding.Findings;
+import org.flexbound.quantity.Dimension;
+import org.flexbound.quantity.Unit;
+import org.flexbound.setup.BeddingIn;
+import org.flexbound.setup.DecisionRule;
+import org.flexbound.setup.FitRange;
+import org.flexbound.setup.QualityLimits;
+import org.flexbound.setup.ReductionOptions;
+import org.flexbound.setup.SlopeFit;
+
+/** Reads the sheet Options: item and entry, shares in percent. */
+final class OptionsReader {
+  /** The items of the sheet, with what belongs in the entry; used by the template too. */
+  static final Map<String, String> ITEMS = items();
+
+  private final EntryCells cells;
+  private final Findings findings;
+
+  OptionsReader(EntryCells cells, Findings findings) {
+    this.cells = cells;
+    this.findings = findings;
+  }
+
+  private static Map<String, String> items() {
+    Map<String, String> items = new LinkedHashMap<>();
+    items.put(
+        "Stated repeatability",
+        "relative standard deviation of a slope from run to run, %; needed where there is one run");
+    items.put("Fit range lower", "lower end of the fit, % of the peak load; usually 10");
+    items.put("Fit range upper", "upper end of the fit, % of the peak load; usually 100");
+    items.put("First cycle", "leave out, or keep");
+    items.put("Slope fit", "automatic, ordinary, both variables or robust");
+    items.put("Local gravity", "m/s², for loads stated in kg");
+    items.put("Base motion", "take out, or leave");
+    items.put("Linearity limit", "% of span");
+    items.put("Hysteresis limit", "% of span");
+    items.put("Repeatability limit", "%");
+    items.put("Zero return limit", "% of the peak reading");
+    items.put("Resolution limit", "% of span");
+    items.put("Curvature limit", "% of span");
+    items.put("Reciprocity limit", "largest |z| of a pair");
+    items.put("Base motion limit", "largest share of a reading, %");
+    items.put("Decision rule", "guard band, or simple");
+    return items;
+  }
+
+  ReductionOptions read(EntryTable table) {
+    Map<String, EntryTable.Entry> common = new LinkedHashMap<>();
+    Map<String, Double> lower = new LinkedHashMap<>();
+    Map<String, Double> upper = new LinkedHashMap<>();
+    for (EntryTable.Entry entry : table.entries()) {
+      Optional<String> item =
+          ITEMS.keySet().stream()
+              .filter(EntryCells.text(entry, "Item")::equalsIgnoreCase)
+              .findFirst();
+      Optional<String> gauge = EntryCells.name(entry, "Gauge");
+      if (entry.get("Entry").isBlank() && item.isPresent()) {
+        continue;
+      }
+      if (item.isEmpty()) {
+        findings.add(
+            TestlogFinding.OPTION,
+            entry.get("Item").where(),
+            "found '"
+                + EntryCells.text(entry, "Item")
+                + "'; expected one of "
+                + String.join(", ", ITEMS.keySet()));
+      } else if (gauge.isEmpty()) {
+        common.put(item.get(), entry);
+      } else if (item.get().equals("Fit range lower")) {
+        percent(entry).ifPresent(value -> lower.put(gauge.get(), value));
+      } else if (item.get().equals("Fit range upper")) {
+        percent(entry).ifPresent(value -> upper.put(gauge.get(), value));
+      } else {
+        findings.add(
+            TestlogFinding.OPTION,
+            entry.get("Gauge").where(),
+            "'" + item.get() + "' cannot be set for one gauge; expected a blank cell");
+      }
+    }
+    return options(common, lower, upper);
+  }
+
+  private ReductionOptions options(
+      Map<String, EntryTable.Entry> common, Map<String, Double> lower, Map<String, Double> upper) {
+    ReductionOptions usual = ReductionOptions.USUAL;
+    FitRange range =
+        range(
+            share(common, "Fit range lower", usual.fitRange().lower()),
+            share(common, "Fit range upper", usual.fitRange().upper()),
+            Optional.ofNullable(common.get("Fit range lower"))
+                .or(() -> Optional.ofNullable(common.get("Fit range upper"))));
+    Map<String, FitRange> byGauge = new LinkedHashMap<>();
+    lower.forEach(
+        (gauge, value) ->
+            byGauge.put(
+                gauge, range(value, upper.getOrDefault(gauge, range.upper()), Optional.empty())));
+    upper.forEach(
+        (gauge, value) ->
+            byGauge.putIfAbsent(gauge, range(range.lower(), value, Optional.empty())));
+    QualityLimits q = usual.qualityLimits();
+    QualityLimits quality =
+        new QualityLimits(
+            share(common, "Linearity limit", q.linearity()),
+            share(common, "Hysteresis limit", q.hysteresis()),
+            share(common, "Repeatability limit", q.repeatability()),
+            share(common, "Zero return limit", q.zeroReturn()),
+            share(common, "Resolution limit", q.resolution()),
+            share(common, "Curvature limit", q.curvature()),
+            number(common, "Reciprocity limit").orElse(q.reciprocityZ()),
+            share(common, "Base motion limit", q.baseMotionShare()));
+    EntryTable.Entry repeatability = common.get("Stated repeatability");
+    return new ReductionOptions(
+        repeatability == null ? OptionalDouble.empty() : opt(percent(repeatability)),
+        range,
+        byGauge,
+        choice(common, "First cycle", List.of("leave out", "keep")) == 1
+            ? BeddingIn.KEEP
+            : BeddingIn.LEAVE_OUT_WHERE_OTHERS,
+        List.of(SlopeFit.values())
+            .get(
+                choice(
+                    common,
+                    "Slope fit",
+                    List.of("automatic", "ordinary", "both variables", "robust"))),
+        gravity(common),
+        choice(common, "Base motion", List.of("take out", "leave")) == 0,
+        quality,
+        List.of(DecisionRule.values())
+            .get(choice(common, "Decision rule", List.of("guard band", "simple"))));
+  }
+
+  private static OptionalDouble opt(Optional<Double> value) {
+    return value.isPresent() ? OptionalDouble.of(value.get()) : OptionalDouble.empty();
+  }
+
+  private double gravity(Map<String, EntryTable.Entry> common) {
+    EntryTable.Entry entry = common.get("Local gravity");
+    if (entry == null) {
+      return ReductionOptions.STANDARD_GRAVITY;
+    }
+    OptionalDouble value = cells.number(entry, "Entry");
+    Unit unit =
+        cells
+            .unit(entry.get("Unit"), List.of(Dimension.ACCELERATION), "acceleration, such as m/s²")
+            .orElse(new Unit("m/s²", Dimension.ACCELERATION, 1, 0));
+    double si = unit.toSi(value.orElse(ReductionOptions.STANDARD_GRAVITY));
+    // on the Earth's surface gravity lies from 9.76 to 9.84 m/s²
+    if (!(si > 9.7 && si < 9.9)) {
+      findings.add(
+          TestlogFinding.OUT_OF_RANGE,
+          entry.get("Entry").where(),
+          "found " + si + " m/s²; expected the local gravity, 9.76 to 9.84 m/s²");
+    }
+    return si;
+  }
+
+  private FitRange range(double lower, double upper, Optional<EntryTable.Entry> entry) {
+    if (0 <= lower && lower < upper && upper <= 1) {
+      return new FitRange(lower, upper);
+    }
+    entry.ifPresent(
+        found ->
+            findings.add(
+                TestlogFinding.OUT_OF_RANGE,
+                found.get("Entry").where(),
+                "found a fit range from "
+                    + 100 * lower
+                    + " to "
+                    + 100 * upper
+                    + " %; expected it to rise from 0 or more to 100 or less"));
+    return FitRange.USUAL;
+  }
+
+  private double share(Map<String, EntryTable.Entry> common, String item, double otherwise) {
+    EntryTable.Entry entry = common.get(item);
+    return entry == null ? otherwise : percent(entry).orElse(otherwise);
+  }
+
+  private OptionalDouble number(Map<String, EntryTable.Entry> common, String item) {
+    EntryTable.Entry entry = common.get(item);
+    return entry == null ? OptionalDouble.empty() : cells.notNegative(entry, "Entry");
+  }
+
+  private Optional<Double> percent(EntryTable.Entry entry) {
+    OptionalDouble number = cells.notNegative(entry, "Entry");
+    return number.isPresent() ? Optional.of(number.getAsDouble() / 100) : Optional.empty();
+  }
+
+  private int choice(Map<String, EntryTable.Entry> common, String item, List<String> words) {
+    EntryTable.Entry entry = common.get(item);
+    if (entry == null) {
+      return 0;
+    }
+    String wanted = EntryCells.text(entry, "Entry").toLowerCase(Locale.ROOT);
+    int index = words.indexOf(wanted);
+    if (index < 0) {
+      findings.add(
+          TestlogFinding.CHOICE,
+          entry.get("Entry").where(),
+          "found '" + wanted + "'; expected " + String.join(", ", words));
+      return 0;
+    }
+    return index;
+  }
+}

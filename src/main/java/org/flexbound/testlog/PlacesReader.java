@@ -1,0 +1,125 @@
+package org.flexbound.testlog;
+
+import java.util.Locale;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import org.flexbound.document.EntryTable;
+import org.flexbound.finding.Findings;
+import org.flexbound.quantity.Dimension;
+import org.flexbound.quantity.Unit;
+import org.flexbound.quantity.Units;
+import org.flexbound.setup.Direction;
+import org.flexbound.setup.DirectionText;
+import org.flexbound.setup.Placing;
+import org.flexbound.setup.Station;
+import org.flexbound.setup.Vector;
+
+/** Reads the columns that say where something stands: node, member and share, X, Y, Z, direction. */
+final class PlacesReader {
+  private final EntryTable table;
+  private final Unit length;
+  private final EntryCells cells;
+  private final Findings findings;
+
+  PlacesReader(EntryTable table, Unit length, EntryCells cells, Findings findings) {
+    this.table = table;
+    this.length = length;
+    this.cells = cells;
+    this.findings = findings;
+  }
+
+  /** The place in space, where X, Y and Z are stated; a blank one of them beside others is 0. */
+  Optional<Vector> coordinates(EntryTable.Entry entry) {
+    OptionalDouble x = coordinate(entry, "X");
+    OptionalDouble y = coordinate(entry, "Y");
+    OptionalDouble z = coordinate(entry, "Z");
+    if (x.isEmpty() && y.isEmpty() && z.isEmpty()) {
+      return Optional.empty();
+    }
+    return Optional.of(new Vector(x.orElse(0), y.orElse(0), z.orElse(0)));
+  }
+
+  private OptionalDouble coordinate(EntryTable.Entry entry, String column) {
+    OptionalDouble number = cells.number(entry, column);
+    if (number.isEmpty()) {
+      return number;
+    }
+    Unit unit = cells.headerUnit(table, column, length, Dimension.LENGTH, "length");
+    return OptionalDouble.of(unit.toSi(number.getAsDouble()));
+  }
+
+  /** A node, or {@code member @ share}; empty where the cell is blank. */
+  Optional<Station> station(EntryTable.Value value) {
+    if (value.isBlank()) {
+      return Optional.empty();
+    }
+    int at = value.text().lastIndexOf('@');
+    if (at < 0) {
+      return Optional.of(new Station.AtNode(value.text(), Vector.ZERO));
+    }
+    OptionalDouble share = EntryCells.numberIn(value.text().substring(at + 1));
+    if (share.isEmpty() || !(share.getAsDouble() >= 0 && share.getAsDouble() <= 1)) {
+      findings.add(
+          TestlogFinding.OUT_OF_RANGE,
+          value.where(),
+          "found '" + value.text() + "'; expected a member and a share from 0 to 1, as in post @ 0.4");
+      return Optional.empty();
+    }
+    return Optional.of(
+        new Station.OnMember(value.text().substring(0, at).strip(), share.getAsDouble()));
+  }
+
+  /** The direction; a wrong one is a finding. */
+  Optional<Direction> direction(EntryTable.Entry entry) {
+    EntryTable.Value value = entry.get("Direction");
+    if (value.isBlank()) {
+      findings.add(
+          TestlogFinding.MISSING_ENTRY,
+          value.where(),
+          "found no direction; expected one such as " + DirectionText.EXPECTED);
+      return Optional.empty();
+    }
+    Optional<Direction> direction = DirectionText.parse(value.text());
+    if (direction.isEmpty()) {
+      findings.add(
+          TestlogFinding.DIRECTION,
+          value.where(),
+          "found '" + value.text() + "'; expected one such as " + DirectionText.EXPECTED);
+    }
+    return direction;
+  }
+
+  /** How well the place and the line are known. */
+  Placing placing(EntryTable.Entry entry) {
+    OptionalDouble position = cells.notNegative(entry, "Position uncertainty");
+    OptionalDouble angle = cells.notNegative(entry, "Angle uncertainty");
+    if (position.isPresent()) {
+      Unit unit =
+          cells.headerUnit(table, "Position uncertainty", length, Dimension.LENGTH, "length");
+      position = OptionalDouble.of(unit.toSi(position.getAsDouble()));
+    }
+    if (angle.isPresent()) {
+      Unit unit =
+          cells.headerUnit(table, "Angle uncertainty", degree(), Dimension.ANGLE, "angle");
+      angle = OptionalDouble.of(unit.toSi(angle.getAsDouble()));
+    }
+    return new Placing(position, angle);
+  }
+
+  private static Unit degree() {
+    return Units.known("deg");
+  }
+
+  /** Dimensions that a load's column may have. */
+  static List<Dimension> loadDimensions(boolean moment) {
+    return moment
+        ? List.of(Dimension.MOMENT)
+        : List.of(Dimension.FORCE, Dimension.MASS);
+  }
+
+  /** A word as it is compared. */
+  static String key(String text) {
+    return text.strip().toLowerCase(Locale.ROOT);
+  }
+}

@@ -1,0 +1,132 @@
+package org.flexbound.testlog;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import org.flexbound.document.EntryTable;
+import org.flexbound.finding.Findings;
+import org.flexbound.finding.Where;
+import org.flexbound.quantity.Dimension;
+import org.flexbound.quantity.Unit;
+
+/** Reads the sheet Runs: what each run's columns mean. */
+final class RunRows {
+  private RunRows() {}
+
+  /**
+   * A run as the sheet describes it.
+   *
+   * @param name its name
+   * @param sheet the sheet of its readings
+   * @param firstRow its first row; 0 for the first below the header
+   * @param lastRow its last row; the largest integer for the sheet's last
+   * @param meanings column header to name of load or gauge
+   * @param date when
+   * @param temperature K
+   * @param use whether it is used
+   * @param remark the remark
+   * @param where its first row on the sheet Runs
+   */
+  record RunRow(
+      String name,
+      String sheet,
+      int firstRow,
+      int lastRow,
+      Map<String, Meaning> meanings,
+      String date,
+      OptionalDouble temperature,
+      boolean use,
+      String remark,
+      Where where) {}
+
+  /**
+   * What a column reads.
+   *
+   * @param name the load's or the gauge's name
+   * @param column the header text as written
+   * @param where the cell that says so
+   */
+  record Meaning(String name, String column, Where where) {}
+
+  static List<RunRow> read(EntryTable table, EntryCells cells, Findings findings) {
+    Map<String, List<EntryTable.Entry>> byName = new LinkedHashMap<>();
+    for (EntryTable.Entry entry : table.entries()) {
+      cells
+          .need(entry, "Run")
+          .ifPresent(name -> byName.computeIfAbsent(name, key -> new ArrayList<>()).add(entry));
+    }
+    List<RunRow> runs = new ArrayList<>();
+    byName.forEach((name, rows) -> run(table, name, rows, cells, findings).ifPresent(runs::add));
+    return runs;
+  }
+
+  private static Optional<RunRow> run(
+      EntryTable table,
+      String name,
+      List<EntryTable.Entry> rows,
+      EntryCells cells,
+      Findings findings) {
+    EntryTable.Entry first = rows.get(0);
+    Map<String, Meaning> meanings = new LinkedHashMap<>();
+    for (EntryTable.Entry row : rows) {
+      Optional<String> column = EntryCells.name(row, "Column");
+      Optional<String> meaning = EntryCells.name(row, "Load or gauge");
+      if (column.isPresent() != meaning.isPresent()) {
+        findings.add(
+            TestlogFinding.MISSING_ENTRY,
+            row.get(column.isPresent() ? "Load or gauge" : "Column").where(),
+            "found nothing; expected both a column and the load or gauge it reads, or neither");
+      } else if (column.isPresent()) {
+        Meaning earlier =
+            meanings.putIfAbsent(
+                ReadingsSheet.key(column.get()),
+                new Meaning(meaning.get(), column.get(), row.get("Load or gauge").where()));
+        if (earlier != null) {
+          findings.add(
+              TestlogFinding.COLUMN_CLAIMED_TWICE,
+              row.get("Column").where(),
+              "found the column '" + column.get() + "' again in run '" + name + "', first at "
+                  + earlier.where());
+        }
+      }
+      if (!EntryCells.text(row, "Sheet").equals(EntryCells.text(first, "Sheet"))
+          && !row.get("Sheet").isBlank()) {
+        findings.add(
+            TestlogFinding.TWICE,
+            row.get("Sheet").where(),
+            "found another sheet for the run '" + name + "'; expected '"
+                + EntryCells.text(first, "Sheet") + "', or another name for the run");
+      }
+    }
+    Optional<String> sheet = cells.need(first, "Sheet");
+    Unit celsius = org.flexbound.quantity.Units.known("°C");
+    OptionalDouble temperature = cells.number(first, "Temperature");
+    if (temperature.isPresent()) {
+      temperature =
+          OptionalDouble.of(
+              cells
+                  .headerUnit(
+                      table, "Temperature", celsius, Dimension.TEMPERATURE, "temperature")
+                  .toSi(temperature.getAsDouble()));
+    }
+    OptionalDouble from = cells.number(first, "First row");
+    OptionalDouble to = cells.number(first, "Last row");
+    OptionalDouble kelvin = temperature;
+    return sheet.map(
+        found ->
+            new RunRow(
+                name,
+                found,
+                (int) from.orElse(0),
+                (int) to.orElse(Integer.MAX_VALUE),
+                meanings,
+                EntryCells.text(first, "Date").replace("T00:00", ""),
+                kelvin,
+                cells.yes(first, "Use", true),
+                EntryCells.text(first, "Remark"),
+                first.get("Run").where()));
+  }
+}
