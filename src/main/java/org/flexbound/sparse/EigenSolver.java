@@ -12,6 +12,8 @@ import java.util.Arrays;
 public final class EigenSolver {
   /** A first shift below zero, relative to the largest ratio of the diagonals of K and M. */
   private static final double SMALL_SHIFT = 1e-9;
+  /** The projected problem is solved again when the basis has grown by this part of its size. */
+  private static final int CHECK_GROWTH = 10;
 
   private final EigenSettings settings;
   private final FactorSettings factorSettings;
@@ -54,7 +56,13 @@ public final class EigenSolver {
     BlockLanczos lanczos = new BlockLanczos(start.factor, m, settings.blockSize(), settings.seed());
     int limit = Math.max(settings.largestBasis(), 2 * count + 4 * settings.blockSize());
     int wanted = count;
+    int next = count;
     for (;;) {
+      if (lanczos.basisSize() < Math.min(next, limit - settings.blockSize()) && !lanczos.exhausted()) {
+        lanczos.step();
+        continue;
+      }
+      next = lanczos.basisSize() + Math.max(1, lanczos.basisSize() / CHECK_GROWTH);
       int settled = lanczos.settle(settings.tolerance());
       boolean full = lanczos.basisSize() + settings.blockSize() > limit;
       if (settled < wanted && !lanczos.exhausted() && !full) {
