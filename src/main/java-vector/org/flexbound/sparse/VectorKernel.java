@@ -65,4 +65,28 @@ final class VectorKernel implements DenseKernel {
     DoubleVector.fromArray(S, c, c3 + 8).sub(s13).intoArray(c, c3 + 8);
     DoubleVector.fromArray(S, c, c3 + 16).sub(s23).intoArray(c, c3 + 16);
   }
+
+  @Override
+  public void subtractNarrow(double[] a, int ao, int as, double[] b, int b0, int b1, int b2, int b3, int bs, int depth, double[] c, int c0,
+      int c1, int c2, int c3) {
+    DoubleVector s0 = DoubleVector.zero(S);
+    DoubleVector s1 = s0;
+    DoubleVector s2 = s0;
+    DoubleVector s3 = s0;
+    int p = ao;
+    int q = 0;
+    for (int k = 0; k < depth; k++) {
+      DoubleVector x = DoubleVector.fromArray(S, a, p);
+      s0 = x.fma(DoubleVector.broadcast(S, b[b0 + q]), s0);
+      s1 = x.fma(DoubleVector.broadcast(S, b[b1 + q]), s1);
+      s2 = x.fma(DoubleVector.broadcast(S, b[b2 + q]), s2);
+      s3 = x.fma(DoubleVector.broadcast(S, b[b3 + q]), s3);
+      p += as;
+      q += bs;
+    }
+    DoubleVector.fromArray(S, c, c0).sub(s0).intoArray(c, c0);
+    DoubleVector.fromArray(S, c, c1).sub(s1).intoArray(c, c1);
+    DoubleVector.fromArray(S, c, c2).sub(s2).intoArray(c, c2);
+    DoubleVector.fromArray(S, c, c3).sub(s3).intoArray(c, c3);
+  }
 }

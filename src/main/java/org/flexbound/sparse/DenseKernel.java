@@ -11,12 +11,18 @@ import java.util.Optional;
 interface DenseKernel {
   /** Entries of a tile along the contiguous direction of A and C. */
   int WIDTH = 24;
+  /** Entries of a narrow tile. */
+  int NARROW = 8;
 
   /**
    * {@code c[ct + i] -= sum over k < depth of a[ao + k·as + i] · b[bt + k·bs]} for i from 0 to {@link #WIDTH} - 1 and t from 0 to 3.
    */
   void subtract(double[] a, int ao, int as, double[] b, int b0, int b1, int b2, int b3, int bs, int depth, double[] c, int c0, int c1, int c2,
       int c3);
+
+  /** The same for i from 0 to {@link #NARROW} - 1. */
+  void subtractNarrow(double[] a, int ao, int as, double[] b, int b0, int b1, int b2, int b3, int bs, int depth, double[] c, int c0, int c1,
+      int c2, int c3);
 
   /** A short name for reports. */
   String name();

@@ -17,7 +17,7 @@ final class LeastWork implements Ordering {
   public int[] order(Graph graph) {
     int[] degree = Ordering.minimumDegree().order(graph);
     double work = operations(graph, degree);
-    if (work < WORTH_DISSECTING * graph.vertexCount()) {
+    if (work <= WORTH_DISSECTING * graph.vertexCount()) {
       return degree;
     }
     int[] best = degree;

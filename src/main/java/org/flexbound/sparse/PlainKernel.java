@@ -15,6 +15,14 @@ final class PlainKernel implements DenseKernel {
     }
   }
 
+  @Override
+  public void subtractNarrow(double[] a, int ao, int as, double[] b, int b0, int b1, int b2, int b3, int bs, int depth, double[] c, int c0,
+      int c1, int c2, int c3) {
+    for (int i = 0; i < NARROW; i += 4) {
+      block(a, ao + i, as, b, b0, b1, b2, b3, bs, depth, c, c0 + i, c1 + i, c2 + i, c3 + i);
+    }
+  }
+
   private static void block(double[] a, int ao, int as, double[] b, int b0, int b1, int b2, int b3, int bs, int depth, double[] c, int c0,
       int c1, int c2, int c3) {
     double s00 = 0;

@@ -3,13 +3,12 @@ package org.flexbound.sparse;
 import java.util.Arrays;
 
 /**
- * Forward and backward substitution with a supernodal factor. Right-hand sides are taken in blocks of {@link DenseKernel#WIDTH}, each block
- * kept row by row, so that the {@link DenseKernel} works directly on the factor's panels; a few left over are taken singly.
+ * Forward and backward substitution with a supernodal factor: right-hand sides are taken in blocks as wide as the tiles of the
+ * {@link DenseKernel}, wide ones first, a last one or two singly.
  */
 final class TriangularSolve {
-  private static final int BLOCK = DenseKernel.WIDTH;
-  /** So many right-hand sides are padded to a block rather than taken singly. */
-  private static final int WORTH_PADDING = 7;
+  /** So few right-hand sides are taken singly. */
+  private static final int SINGLY = 1;
 
   private final SymbolicFactor symbolic;
   private final double[][] panels;
@@ -23,6 +22,41 @@ final class TriangularSolve {
     this.kernel = kernel;
   }
 
+  /** First columns of the blocks that so many right-hand sides are taken in, and their number at the end. */
+  private static int[] blocks(int columns) {
+    int wide = columns / DenseKernel.WIDTH;
+    int rest = columns - wide * DenseKernel.WIDTH;
+    if (rest > 2 * DenseKernel.NARROW) {
+      wide++;
+      rest = 0;
+    }
+    int narrow = (rest + DenseKernel.NARROW - 1) / DenseKernel.NARROW;
+    int[] starts = new int[wide + narrow + 1];
+    for (int b = 1; b < starts.length; b++) {
+      starts[b] = Math.min(columns, starts[b - 1] + (b <= wide ? DenseKernel.WIDTH : DenseKernel.NARROW));
+    }
+    return starts;
+  }
+
+  private static int width(int count) {
+    return count > DenseKernel.NARROW ? DenseKernel.WIDTH : count > SINGLY ? DenseKernel.NARROW : 1;
+  }
+
+  private void substitute(double[] x, int width, int[] forward, int[] backward) {
+    if (width == 1) {
+      forwardSingle(x, forward);
+      backwardSingle(x, backward);
+    } else {
+      BlockSubstitution block = new BlockSubstitution(symbolic, panels, pivots, kernel, width, x);
+      block.forward(forward);
+      block.backward(backward);
+    }
+  }
+
+  private double[] rows(int width) {
+    return new double[Math.multiplyExact(Math.addExact(pivots.length, BlockSubstitution.SPARE_ROWS), width)];
+  }
+
   /** Solves in place, size × columns, column-major. */
   void solve(double[] rhs, int columns) {
     int n = pivots.length;
@@ -30,44 +64,26 @@ final class TriangularSolve {
     for (int s = 0; s < all.length; s++) {
       all[s] = s;
     }
-    int units = blocks(columns);
-    Crew.each(symbolic.settings().threads(), units, u -> {
-      int from = u * BLOCK;
-      int count = Math.min(BLOCK, columns - from);
-      if (count >= WORTH_PADDING) {
-        double[] x = new double[Math.multiplyExact(n, BLOCK)];
-        for (int k = 0; k < n; k++) {
-          int row = symbolic.order[k];
-          for (int c = 0; c < count; c++) {
-            x[k * BLOCK + c] = rhs[(from + c) * n + row];
-          }
+    int[] blocks = blocks(columns);
+    Crew.each(symbolic.settings().threads(), blocks.length - 1, u -> {
+      int from = blocks[u];
+      int count = blocks[u + 1] - from;
+      int width = width(count);
+      double[] x = rows(width);
+      for (int k = 0; k < n; k++) {
+        int row = from * n + symbolic.order[k];
+        for (int c = 0; c < count; c++) {
+          x[k * width + c] = rhs[c * n + row];
         }
-        forward(x, all);
-        backward(x, all);
-        for (int k = 0; k < n; k++) {
-          int row = symbolic.order[k];
-          for (int c = 0; c < count; c++) {
-            rhs[(from + c) * n + row] = x[k * BLOCK + c];
-          }
-        }
-      } else {
-        double[] x = new double[n];
-        for (int c = from; c < from + count; c++) {
-          for (int k = 0; k < n; k++) {
-            x[k] = rhs[c * n + symbolic.order[k]];
-          }
-          forwardSingle(x, all);
-          backwardSingle(x, all);
-          for (int k = 0; k < n; k++) {
-            rhs[c * n + symbolic.order[k]] = x[k];
-          }
+      }
+      substitute(x, width, all, all);
+      for (int k = 0; k < n; k++) {
+        int row = from * n + symbolic.order[k];
+        for (int c = 0; c < count; c++) {
+          rhs[c * n + row] = x[k * width + c];
         }
       }
     });
-  }
-
-  private static int blocks(int columns) {
-    return (columns + BLOCK - 1) / BLOCK;
   }
 
   /** Solves for sparse right-hand sides, wanted rows only. */
@@ -75,34 +91,24 @@ final class TriangularSolve {
     int columns = rhs.columnCount();
     double[] chosen = new double[Math.multiplyExact(wanted.length, columns)];
     int[] back = reach(wanted, 0, wanted.length);
-    Crew.each(symbolic.settings().threads(), blocks(columns), u -> {
-      int from = u * BLOCK;
-      int count = Math.min(BLOCK, columns - from);
-      int[] starts = rhs.columnStarts();
-      int[] rows = rhs.rowIndices();
-      double[] values = rhs.entries();
-      int width = count >= WORTH_PADDING ? BLOCK : 1;
-      double[] x = new double[Math.multiplyExact(pivots.length, width)];
-      for (int c = from; c < from + count; c += width) {
-        int end = Math.min(from + count, c + width);
-        Arrays.fill(x, 0);
-        for (int d = c; d < end; d++) {
-          for (int p = starts[d]; p < starts[d + 1]; p++) {
-            x[symbolic.places[rows[p]] * width + d - c] += values[p];
-          }
+    int[] blocks = blocks(columns);
+    int[] starts = rhs.columnStarts();
+    int[] rows = rhs.rowIndices();
+    double[] values = rhs.entries();
+    Crew.each(symbolic.settings().threads(), blocks.length - 1, u -> {
+      int from = blocks[u];
+      int to = blocks[u + 1];
+      int width = width(to - from);
+      double[] x = rows(width);
+      for (int c = from; c < to; c++) {
+        for (int p = starts[c]; p < starts[c + 1]; p++) {
+          x[symbolic.places[rows[p]] * width + c - from] += values[p];
         }
-        int[] reached = reach(rows, starts[c], starts[end]);
-        if (width == BLOCK) {
-          forward(x, reached);
-          backward(x, back);
-        } else {
-          forwardSingle(x, reached);
-          backwardSingle(x, back);
-        }
-        for (int d = c; d < end; d++) {
-          for (int w = 0; w < wanted.length; w++) {
-            chosen[d * wanted.length + w] = x[symbolic.places[wanted[w]] * width + d - c];
-          }
+      }
+      substitute(x, width, reach(rows, starts[from], starts[to]), back);
+      for (int c = from; c < to; c++) {
+        for (int w = 0; w < wanted.length; w++) {
+          chosen[c * wanted.length + w] = x[symbolic.places[wanted[w]] * width + c - from];
         }
       }
     });
@@ -130,119 +136,6 @@ final class TriangularSolve {
       }
     }
     return list;
-  }
-
-  private void forward(double[] x, int[] supernodes) {
-    for (int s : supernodes) {
-      double[] panel = panels[s];
-      int height = symbolic.height(s);
-      int width = symbolic.width(s);
-      int own = symbolic.starts[s] * BLOCK;
-      int j = 0;
-      for (; j + 4 <= width; j += 4) {
-        int c = own + j * BLOCK;
-        subtractColumns(panel, height, j, j, x, own, c, c + BLOCK, c + 2 * BLOCK, c + 3 * BLOCK);
-        for (int k = 0; k < 3; k++) {
-          int p = Panel.column(j + k, height) + j;
-          for (int t = k + 1; t < 4; t++) {
-            subtractRow(x, c + k * BLOCK, panel[p + t], c + t * BLOCK);
-          }
-        }
-      }
-      for (; j < width; j++) {
-        for (int k = 0; k < j; k++) {
-          subtractRow(x, own + k * BLOCK, panel[Panel.column(k, height) + j], own + j * BLOCK);
-        }
-      }
-      int[] rows = symbolic.rows;
-      int at = symbolic.rowStarts[s] - width;
-      for (j = width; j + 4 <= height; j += 4) {
-        subtractColumns(panel, height, j, width, x, own, rows[at + j] * BLOCK, rows[at + j + 1] * BLOCK, rows[at + j + 2] * BLOCK,
-            rows[at + j + 3] * BLOCK);
-      }
-      for (; j < height; j++) {
-        int target = rows[at + j] * BLOCK;
-        for (int k = 0; k < width; k++) {
-          subtractRow(x, own + k * BLOCK, panel[Panel.column(k, height) + j], target);
-        }
-      }
-    }
-  }
-
-  /** Takes the first {@code depth} columns of a panel out of four rows of the right-hand sides. */
-  private void subtractColumns(double[] panel, int height, int row, int depth, double[] x, int own, int c0, int c1, int c2, int c3) {
-    for (int k = 0; k < depth; k += Panel.BLOCK) {
-      int b = Panel.column(k, height) + row;
-      kernel.subtract(x, own + k * BLOCK, BLOCK, panel, b, b + 1, b + 2, b + 3, Panel.stride(k, height), Math.min(Panel.BLOCK, depth - k), x,
-          c0, c1, c2, c3);
-    }
-  }
-
-  private static void subtractRow(double[] x, int from, double factor, int to) {
-    for (int i = 0; i < BLOCK; i++) {
-      x[to + i] = Math.fma(-factor, x[from + i], x[to + i]);
-    }
-  }
-
-  private void backward(double[] x, int[] supernodes) {
-    double[] gathered = new double[0];
-    for (int i = supernodes.length - 1; i >= 0; i--) {
-      int s = supernodes[i];
-      double[] panel = panels[s];
-      int height = symbolic.height(s);
-      int width = symbolic.width(s);
-      int first = symbolic.starts[s];
-      int own = first * BLOCK;
-      int below = height - width;
-      if (gathered.length < below * BLOCK) {
-        gathered = new double[below * BLOCK];
-      }
-      for (int r = 0; r < below; r++) {
-        System.arraycopy(x, symbolic.rows[symbolic.rowStarts[s] + r] * BLOCK, gathered, r * BLOCK, BLOCK);
-      }
-      for (int j = 0; j < width; j++) {
-        double inverse = 1 / pivots[first + j];
-        for (int c = own + j * BLOCK; c < own + (j + 1) * BLOCK; c++) {
-          x[c] *= inverse;
-        }
-      }
-      // Columns in fours from the last; what is left over comes first in the supernode and is done at the end.
-      int j = width - 4;
-      for (; j >= 0; j -= 4) {
-        int c = own + j * BLOCK;
-        int b0 = Panel.column(j, height);
-        int b1 = Panel.column(j + 1, height);
-        int b2 = Panel.column(j + 2, height);
-        int b3 = Panel.column(j + 3, height);
-        kernel.subtract(gathered, 0, BLOCK, panel, b0 + width, b1 + width, b2 + width, b3 + width, 1, below, x, c, c + BLOCK, c + 2 * BLOCK,
-            c + 3 * BLOCK);
-        int next = j + 4;
-        kernel.subtract(x, c + 4 * BLOCK, BLOCK, panel, b0 + next, b1 + next, b2 + next, b3 + next, 1, width - next, x, c, c + BLOCK,
-            c + 2 * BLOCK, c + 3 * BLOCK);
-        for (int t = 2; t >= 0; t--) {
-          int p = Panel.column(j + t, height) + j;
-          for (int k = t + 1; k < 4; k++) {
-            subtractRow(x, c + k * BLOCK, panel[p + k], c + t * BLOCK);
-          }
-        }
-      }
-      for (j += 3; j >= 0; j--) {
-        int target = own + j * BLOCK;
-        int p = Panel.column(j, height);
-        for (int r = 0; r < below; r++) {
-          subtractRow(x, gathered, r * BLOCK, panel[p + width + r], target);
-        }
-        for (int k = j + 1; k < width; k++) {
-          subtractRow(x, own + k * BLOCK, panel[p + k], target);
-        }
-      }
-    }
-  }
-
-  private static void subtractRow(double[] x, double[] from, int at, double factor, int to) {
-    for (int i = 0; i < BLOCK; i++) {
-      x[to + i] = Math.fma(-factor, from[at + i], x[to + i]);
-    }
   }
 
   private void forwardSingle(double[] x, int[] supernodes) {

@@ -18,6 +18,7 @@ class KernelTest {
     double[] b = random.doubles(2000, -1, 1).toArray();
     for (int depth : new int[] {0, 1, 5, 40}) {
       double[] c = random.doubles(400, -1, 1).toArray();
+      double[] before = c.clone();
       double[] expected = c.clone();
       int[] columns = {0, 100, 200, 300};
       int[] starts = {3, 60, 7, 900};
@@ -28,7 +29,14 @@ class KernelTest {
           }
         }
       }
+      double[] narrow = c.clone();
+      new PlainKernel().subtractNarrow(a, 11, 30, b, 3, 60, 7, 900, 2, depth, narrow, 0, 100, 200, 300);
       new PlainKernel().subtract(a, 11, 30, b, 3, 60, 7, 900, 2, depth, c, 0, 100, 200, 300);
+      for (int i = 0; i < c.length; i++) {
+        boolean inside = i % 100 < DenseKernel.NARROW;
+        boolean wide = i % 100 < DenseKernel.WIDTH;
+        assertThat(narrow[i]).isEqualTo(inside || !wide ? c[i] : before[i]);
+      }
       for (int i = 0; i < c.length; i++) {
         assertThat(c[i]).isCloseTo(expected[i], within(1e-13));
       }
@@ -52,8 +60,8 @@ class KernelTest {
 
   private static int solutionHash() {
     LatticeFrame frame = LatticeFrame.of(6, 6, 6, true, true);
-    double[] x = RandomMatrix.vector(frame.stiffness.size() * 10, 17);
-    SymbolicFactor.analyze(frame.stiffness.pattern(), frame.group, FactorSettings.defaults()).cholesky(frame.stiffness).solve(x, 10);
+    double[] x = RandomMatrix.vector(frame.stiffness.size() * 30, 17);
+    SymbolicFactor.analyze(frame.stiffness.pattern(), frame.group, FactorSettings.defaults()).cholesky(frame.stiffness).solve(x, 30);
     return Arrays.hashCode(x);
   }
 }
