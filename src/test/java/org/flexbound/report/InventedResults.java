@@ -97,7 +97,7 @@ final class InventedResults {
             new Run(
                 CONFIGURATION,
                 name.apply("R" + j + r),
-                r == 0 ? "good" : "questionable",
+                r == 0 ? "accept" : "doubtful",
                 r == 0 ? List.of() : List.of("the zero did not come back"),
                 "2026-01-17",
                 OptionalDouble.of(294),
@@ -168,6 +168,11 @@ final class InventedResults {
                 OptionalDouble.of(3), OptionalDouble.of(0.35), true, "")),
         Optional.of(structure()),
         comparison,
+        List.of(
+            new JointTest(
+                CONFIGURATION, "Nominal model against all coefficients", 5000,
+                OptionalDouble.of(25), OptionalDouble.of(15), OptionalDouble.empty(), false,
+                "the nominal model disagrees with the test by more than chance explains")),
         contributions,
         List.of(
             parameter("base rz", 0.52, 0.05, "identified", 0.99),

@@ -88,18 +88,18 @@ final class AnswerSection {
   }
 
   private Block.Answer good() {
-    long bad = results.runs().stream().filter(r -> r.verdict().equals("rejected")).count();
-    long doubtful = results.runs().stream().filter(r -> r.verdict().equals("questionable")).count();
+    long bad = results.runs().stream().filter(r -> r.verdict().equals("repeat")).count();
+    long doubtful = results.runs().stream().filter(r -> r.verdict().equals("doubtful")).count();
     List<JointTest> failed = results.jointTests().stream().filter(t -> !t.passed()).toList();
     long pairs = results.reciprocity().stream().filter(p -> Math.abs(p.z()) > FAR).count();
     List<String> details = new ArrayList<>();
     details.add(
         Shown.count(results.runs().size() - bad - doubtful, "run is", "runs are")
-            + " good, "
+            + " accepted, "
             + doubtful
-            + " questionable, "
+            + " doubtful, "
             + bad
-            + " rejected.");
+            + " to be repeated.");
     if (!results.reciprocity().isEmpty()) {
       details.add(
           pairs
@@ -125,7 +125,7 @@ final class AnswerSection {
       return new Block.Answer(
           "Is the test good?",
           bad > 0 && failed.isEmpty()
-              ? "In part: some runs were rejected; what is left can be used."
+              ? "In part: some runs are to be repeated; the others can be used."
               : "Not wholly: it contradicts itself. See the findings before using it.",
           failed.isEmpty() ? Tone.WARN : Tone.BAD,
           details);
@@ -135,7 +135,7 @@ final class AnswerSection {
         "Is the test good?",
         warned
             ? "Usable, with reservations that the findings name."
-            : "Yes: no run was rejected and nothing contradicts itself.",
+            : "Yes: no run is in doubt and nothing contradicts itself.",
         warned ? Tone.WARN : Tone.GOOD,
         details);
   }
@@ -173,7 +173,17 @@ final class AnswerSection {
             + ".");
     Optional<Update> update = results.update();
     if (update.isEmpty()) {
-      boolean far = before > 0.05 * all.size() + 2 * Math.sqrt(0.05 * all.size());
+      boolean far = results.modelTests().stream().anyMatch(t -> !t.passed());
+      for (JointTest test : results.modelTests()) {
+        details.add(
+            "Misfit "
+                + Rounded.significant(test.statistic(), 3)
+                + "; up to "
+                + Shown.optional(test.limit(), 3)
+                + " is explained by the uncertainty of the test"
+                + (results.modelTests().size() > 1 ? " (" + test.configuration() + ")" : "")
+                + ".");
+      }
       return new Block.Answer(
           "Does the model agree?",
           far
@@ -325,7 +335,7 @@ final class AnswerSection {
       }
     }
     for (Run run : results.runs()) {
-      if (run.verdict().equals("rejected")) {
+      if (run.verdict().equals("repeat")) {
         details.add(
             "Repeat run " + run.name() + ": " + String.join("; ", run.reasons()) + ".");
       }

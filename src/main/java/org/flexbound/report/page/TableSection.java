@@ -63,8 +63,8 @@ final class TableSection {
     for (Run run : results.runs()) {
       Tone tone =
           switch (run.verdict()) {
-            case "good" -> Tone.GOOD;
-            case "rejected" -> Tone.BAD;
+            case "accept" -> Tone.GOOD;
+            case "repeat" -> Tone.BAD;
             default -> Tone.WARN;
           };
       List<String> why = new ArrayList<>(run.reasons());

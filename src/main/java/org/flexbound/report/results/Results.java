@@ -28,6 +28,7 @@ import java.util.Optional;
  * @param jointTests tests of several quantities together
  * @param structure the frame model, for its drawing
  * @param comparison measured against computed
+ * @param modelTests the model against all coefficients of a configuration together
  * @param contributions what each part adds to each computed coefficient
  * @param parameters the stiffnesses that the update may change
  * @param update how the update ended
@@ -59,6 +60,7 @@ public record Results(
     List<JointTest> jointTests,
     Optional<Structure> structure,
     List<Comparison> comparison,
+    List<JointTest> modelTests,
     List<Contribution> contributions,
     List<Parameter> parameters,
     Optional<Update> update,
@@ -87,6 +89,7 @@ public record Results(
     reciprocity = List.copyOf(reciprocity);
     jointTests = List.copyOf(jointTests);
     comparison = List.copyOf(comparison);
+    modelTests = List.copyOf(modelTests);
     contributions = List.copyOf(contributions);
     parameters = List.copyOf(parameters);
     validation = List.copyOf(validation);

@@ -8,8 +8,8 @@ import java.util.OptionalDouble;
  *
  * @param configuration the configuration
  * @param name its name
- * @param verdict good, questionable or rejected
- * @param reasons why, one sentence each; empty for a good run
+ * @param verdict accept, doubtful or repeat
+ * @param reasons why, one sentence each; empty where nothing speaks against it
  * @param date when, or empty
  * @param temperature temperature, K
  * @param used false where it was left out
