@@ -1,0 +1,157 @@
+package org.flexbound.reduce;
+
+import org.flexbound.finding.FindingKind;
+import org.flexbound.finding.Severity;
+
+/** What a reduction can find. */
+public enum ReduceFinding implements FindingKind {
+  /** No load varied in a run. */
+  NO_LOAD(
+      "RED-NO-LOAD",
+      Severity.WARNING,
+      "No load varied in a run.",
+      "Check the load column, or say no in the column Use of the sheet Runs."),
+  /** Two loads moved in proportion. */
+  PROPORTIONAL(
+      "RED-PROPORTIONAL",
+      Severity.ERROR,
+      "Two loads that are to be told apart moved in fixed proportion.",
+      "Enter them as one load pattern (two rows of one name on the sheet Load points), or load them"
+          + " one at a time."),
+  /** A slope could not be fitted. */
+  TOO_FEW_STEPS(
+      "RED-TOO-FEW-STEPS",
+      Severity.WARNING,
+      "Too few load steps for a slope.",
+      "Take at least five steps up and five down (common practice)."),
+  /** Only one run and no stated repeatability. */
+  ONE_RUN(
+      "RED-ONE-RUN",
+      Severity.WARNING,
+      "Intervals are without run-to-run spread.",
+      "Repeat the run at least twice, or state the repeatability known from earlier tests on the"
+          + " sheet Options."),
+  /** The gauge's response bends. */
+  CURVED(
+      "RED-CURVED",
+      Severity.WARNING,
+      "A response is curved, significantly and by more than its limit.",
+      "Look for slip, gaps or large deflection; fit a narrower range, or do not use this"
+          + " coefficient."),
+  /** Scatter about the line is large. */
+  NOT_LINEAR(
+      "RED-NOT-LINEAR",
+      Severity.WARNING,
+      "Steps depart from the line by more than the limit.",
+      "Look at the plot; check the gauge and its stand."),
+  /** Loading and unloading differ. */
+  HYSTERESIS(
+      "RED-HYSTERESIS",
+      Severity.WARNING,
+      "Loading and unloading differ by more than the limit.",
+      "Look for friction or slip; bed the structure in by another cycle."),
+  /** The reading does not come back. */
+  ZERO_RETURN(
+      "RED-ZERO-RETURN",
+      Severity.WARNING,
+      "A reading does not come back to its opening zero.",
+      "Look for set, slip or drift; repeat the run."),
+  /** The movement is too small for the gauge. */
+  COARSE(
+      "RED-COARSE",
+      Severity.WARNING,
+      "A gauge is coarse against its movement.",
+      "Use a finer gauge, or more load within the limit."),
+  /** The gauge does not move at all. */
+  STUCK(
+      "RED-STUCK",
+      Severity.WARNING,
+      "A gauge shows one value throughout.",
+      "Check that it touches and is not out of travel."),
+  /** The load passed its limit. */
+  LOAD_LIMIT(
+      "RED-LOAD-LIMIT",
+      Severity.WARNING,
+      "The load passed its stated limit.",
+      "Stop, and have a competent person decide before going on."),
+  /** Runs scatter more than their limit. */
+  NOT_REPEATABLE(
+      "RED-NOT-REPEATABLE",
+      Severity.WARNING,
+      "Slopes of repeated runs differ by more than the limit.",
+      "Look for slip between runs; repeat."),
+  /** A base motion cannot be taken out. */
+  BASE_MOTION_LEFT(
+      "RED-BASE-MOTION-LEFT",
+      Severity.WARNING,
+      "Base motion was not taken out of a gauge.",
+      "Add the base gauge that the message names, or state the places of all gauges."),
+  /** Base motion makes up most of a reading. */
+  BASE_MOTION_LARGE(
+      "RED-BASE-MOTION-LARGE",
+      Severity.WARNING,
+      "Most of a reading is base motion.",
+      "Stiffen the base, or measure from a stand on it."),
+  /** Reciprocity fails. */
+  NOT_RECIPROCAL(
+      "RED-NOT-RECIPROCAL",
+      Severity.WARNING,
+      "Two coefficients that should be equal are not.",
+      "Check gains, directions and places of the two gauges and the two loads."),
+  /** A direct coefficient is not positive or a bound is broken. */
+  NOT_POSITIVE(
+      "RED-NOT-POSITIVE",
+      Severity.WARNING,
+      "Coefficients break a bound that every elastic structure keeps.",
+      "Check directions and columns of the gauges and loads named."),
+  /** Something was not measured. */
+  NOT_MEASURED(
+      "RED-NOT-MEASURED",
+      Severity.WARNING,
+      "A load or a gauge was described but no run measured it.",
+      "Add the run, or remove the row."),
+  /** No slope at all. */
+  NOTHING_MEASURED(
+      "RED-NOTHING-MEASURED",
+      Severity.ERROR,
+      "No flexibility coefficient could be found.",
+      "Check that loads vary and gauges are read within the fit range."),
+  /** Placing uncertainty not included. */
+  PLACING(
+      "RED-PLACING",
+      Severity.NOTE,
+      "Uncertainties of places and angles are not included.",
+      "State them, and compare with a model: only it knows what they do.");
+
+  private final String code;
+  private final Severity severity;
+  private final String meaning;
+  private final String remedy;
+
+  ReduceFinding(String code, Severity severity, String meaning, String remedy) {
+    this.code = code;
+    this.severity = severity;
+    this.meaning = meaning;
+    this.remedy = remedy;
+  }
+
+  @Override
+  public String code() {
+    return code;
+  }
+
+  @Override
+  public Severity severity() {
+    return severity;
+  }
+
+  @Override
+  public String meaning() {
+    return meaning;
+  }
+
+  @Override
+  public String remedy() {
+    return remedy;
+  }
+}

@@ -1,0 +1,364 @@
+package org.flexbound.reduce;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.flexbound.finding.Findings;
+import org.flexbound.finding.Where;
+import org.flexbound.reduce.LoadStep.Fate;
+import org.flexbound.setup.BeddingIn;
+import org.flexbound.setup.FitRange;
+import org.flexbound.setup.Load;
+import org.flexbound.setup.ReductionOptions;
+import org.flexbound.statistics.GroupedLine;
+import org.flexbound.statistics.Regression;
+import org.flexbound.testlog.Channel;
+import org.flexbound.testlog.Run;
+
+/** Reduces one run: steps, branches, a slope for every gauge and varied load. */
+final class RunReducer {
+  /** A load whose range is below this share of the largest did not vary. */
+  private static final double VARIED = 1e-3;
+
+  /** Loads whose correlation leaves less than this unexplained moved in proportion. */
+  private static final double PROPORTIONAL = 1e-4;
+
+  private final Run run;
+  private final Map<String, Load> loads;
+  private final ReductionOptions options;
+  private final Map<String, Double> resolutions;
+  private final Findings findings;
+  private final List<StepGrouping.RawStep> steps;
+  private final List<Exclusion> excluded = new ArrayList<>();
+  private final List<RunSlope> slopes = new ArrayList<>();
+  private int cycles;
+
+  RunReducer(
+      Run run,
+      Map<String, Load> loads,
+      ReductionOptions options,
+      Map<String, Double> resolutions,
+      Findings findings) {
+    this.run = run;
+    this.loads = loads;
+    this.options = options;
+    this.resolutions = resolutions;
+    this.findings = findings;
+    StepGrouping grouping = StepGrouping.of(run);
+    this.steps = grouping.steps();
+    this.excluded.addAll(grouping.excluded());
+  }
+
+  List<RunSlope> slopes() {
+    return List.copyOf(slopes);
+  }
+
+  List<Exclusion> excluded() {
+    return List.copyOf(excluded);
+  }
+
+  RunResult reduce() {
+    List<Integer> varied = varied();
+    double peak = 0;
+    for (int l : varied) {
+      for (StepGrouping.RawStep step : steps) {
+        peak = Math.max(peak, Math.abs(step.load[l]));
+      }
+      checkLimit(l);
+    }
+    if (varied.isEmpty()) {
+      findings.add(ReduceFinding.NO_LOAD, run.where(), "no load varied in run '" + run.name() + "'");
+    } else if (!proportional(varied)) {
+      for (int g = 0; g < run.gauges().size(); g++) {
+        if (varied.size() == 1) {
+          slopes.add(single(g, varied.get(0)));
+        } else {
+          slopes.addAll(several(g, varied));
+        }
+      }
+    }
+    RunJudgement judgement = new RunJudgement(options.qualityLimits(), findings);
+    return judgement.judge(
+        run,
+        varied.stream().map(l -> run.loads().get(l).name()).toList(),
+        peak,
+        steps.size(),
+        cycles,
+        slopes);
+  }
+
+  private double[] column(int load) {
+    return steps.stream().mapToDouble(step -> step.load[load]).toArray();
+  }
+
+  private static double range(double[] values) {
+    double low = Double.POSITIVE_INFINITY;
+    double high = Double.NEGATIVE_INFINITY;
+    for (double value : values) {
+      low = Math.min(low, value);
+      high = Math.max(high, value);
+    }
+    return values.length == 0 ? 0 : high - low;
+  }
+
+  private List<Integer> varied() {
+    double[] ranges = new double[run.loads().size()];
+    double forces = 0;
+    double moments = 0;
+    for (int l = 0; l < ranges.length; l++) {
+      ranges[l] = range(column(l));
+      if (isMoment(l)) {
+        moments = Math.max(moments, ranges[l]);
+      } else {
+        forces = Math.max(forces, ranges[l]);
+      }
+    }
+    List<Integer> varied = new ArrayList<>();
+    for (int l = 0; l < ranges.length; l++) {
+      double largest = isMoment(l) ? moments : forces;
+      if (ranges[l] > 0 && ranges[l] >= VARIED * largest) {
+        varied.add(l);
+      }
+    }
+    return varied;
+  }
+
+  private boolean isMoment(int load) {
+    Load known = loads.get(run.loads().get(load).name());
+    return known != null && known.isMoment();
+  }
+
+  private void checkLimit(int load) {
+    Load known = loads.get(run.loads().get(load).name());
+    if (known == null || known.limit().isEmpty()) {
+      return;
+    }
+    double limit = known.limit().getAsDouble();
+    for (double value : column(load)) {
+      if (Math.abs(value) > limit) {
+        findings.add(
+            ReduceFinding.LOAD_LIMIT,
+            run.where(),
+            String.format(
+                java.util.Locale.ROOT,
+                "'%s' reached %.4g in run '%s'; its limit is %.4g (SI)",
+                known.name(),
+                Math.abs(value),
+                run.name(),
+                limit));
+        return;
+      }
+    }
+  }
+
+  /** Two loads that moved in proportion cannot be told apart. */
+  private boolean proportional(List<Integer> varied) {
+    boolean any = false;
+    for (int i = 0; i < varied.size(); i++) {
+      for (int j = i + 1; j < varied.size(); j++) {
+        double[] a = column(varied.get(i));
+        double[] b = column(varied.get(j));
+        if (unexplained(a, b) < PROPORTIONAL) {
+          any = true;
+          findings.add(
+              ReduceFinding.PROPORTIONAL,
+              run.where(),
+              "'"
+                  + run.loads().get(varied.get(i)).name()
+                  + "' and '"
+                  + run.loads().get(varied.get(j)).name()
+                  + "' moved in fixed proportion in run '"
+                  + run.name()
+                  + "': only their sum's effect can be found");
+        }
+      }
+    }
+    return any;
+  }
+
+  /** 1 − r², r the correlation. */
+  private static double unexplained(double[] a, double[] b) {
+    double meanA = java.util.Arrays.stream(a).average().orElse(0);
+    double meanB = java.util.Arrays.stream(b).average().orElse(0);
+    double aa = 0;
+    double bb = 0;
+    double ab = 0;
+    for (int k = 0; k < a.length; k++) {
+      aa += (a[k] - meanA) * (a[k] - meanA);
+      bb += (b[k] - meanB) * (b[k] - meanB);
+      ab += (a[k] - meanA) * (b[k] - meanB);
+    }
+    return 1 - ab * ab / (aa * bb);
+  }
+
+  /** The steps of a gauge against one load, each with its fate. */
+  private List<LoadStep> fated(int gauge, double[] load, Branches branches, FitRange range) {
+    double peak = java.util.Arrays.stream(load).map(Math::abs).max().orElse(0);
+    boolean leaveOutFirst =
+        options.beddingIn() == BeddingIn.LEAVE_OUT_WHERE_OTHERS && branches.cycles() > 1;
+    List<LoadStep> list = new ArrayList<>();
+    for (int k = 0; k < steps.size(); k++) {
+      StepGrouping.RawStep raw = steps.get(k);
+      double magnitude = Math.abs(load[k]);
+      Fate fate = Fate.FITTED;
+      if (raw.counts[gauge] == 0) {
+        fate = Fate.NOT_READ;
+      } else if (leaveOutFirst && branches.cycle(k) == 1) {
+        fate = Fate.BEDDING_IN;
+      } else if (magnitude < range.lower() * peak * (1 - 1e-9)
+          || magnitude > range.upper() * peak * (1 + 1e-9)) {
+        fate = Fate.OUTSIDE_RANGE;
+      }
+      Where where = raw.counts[gauge] == 0 ? run.where() : raw.where[gauge];
+      list.add(
+          new LoadStep(
+              load[k],
+              raw.motion(gauge),
+              raw.readings,
+              raw.scatter(gauge),
+              branches.rising(k),
+              branches.cycle(k),
+              branches.branch(k),
+              fate,
+              where));
+    }
+    return list;
+  }
+
+  private RunSlope single(int gauge, int load) {
+    Channel gaugeChannel = run.gauges().get(gauge);
+    double[] column = column(load);
+    Branches branches = Branches.of(column);
+    cycles = Math.max(cycles, branches.cycles());
+    FitRange range = options.fitRange(gaugeChannel.name());
+    List<LoadStep> list = fated(gauge, column, branches, range);
+    double peak = java.util.Arrays.stream(column).map(Math::abs).max().orElse(0);
+    noteExcluded(gaugeChannel, list);
+    return fitted(gaugeChannel, run.loads().get(load), list, range, peak);
+  }
+
+  private void noteExcluded(Channel gauge, List<LoadStep> list) {
+    Map<Fate, List<LoadStep>> byFate = new LinkedHashMap<>();
+    for (LoadStep step : list) {
+      if (step.fate() != Fate.FITTED) {
+        byFate.computeIfAbsent(step.fate(), key -> new ArrayList<>()).add(step);
+      }
+    }
+    byFate.forEach(
+        (fate, left) ->
+            excluded.add(
+                new Exclusion(
+                    run.name(),
+                    left.size() + " steps of " + gauge.name(),
+                    left.get(0).where(),
+                    fate.words(),
+                    fate == Fate.LEFT_OUT,
+                    left.stream().mapToInt(LoadStep::readings).sum())));
+  }
+
+  private RunSlope fitted(
+      Channel gauge, Channel load, List<LoadStep> list, FitRange range, double peak) {
+    List<LoadStep> used = list.stream().filter(step -> step.fate() == Fate.FITTED).toList();
+    double[] x = used.stream().mapToDouble(LoadStep::load).toArray();
+    double[] y = used.stream().mapToDouble(LoadStep::motion).toArray();
+    int[] branch = used.stream().mapToInt(LoadStep::branch).toArray();
+    double slope = Double.NaN;
+    double error = Double.NaN;
+    Map<Integer, Double> intercepts = Map.of();
+    Optional<SlopeQuality> quality = Optional.empty();
+    try {
+      GroupedLine line = GroupedLine.fit(x, y, branch);
+      slope = line.slope();
+      error = line.slopeStandardError();
+      intercepts = line.intercepts();
+      quality =
+          Optional.of(
+              QualityFigures.of(
+                  list,
+                  used,
+                  line,
+                  GroupedLine.curvature(x, y, branch),
+                  resolutions.getOrDefault(gauge.instrument().orElse(""), Double.NaN)));
+    } catch (Regression.DependentColumns | IllegalArgumentException tooFew) {
+      findings.add(
+          ReduceFinding.TOO_FEW_STEPS,
+          gauge.where(),
+          used.size() + " steps of '" + gauge.name() + "' in run '" + run.name()
+              + "' lie in the fit range at too few different loads");
+    }
+    return new RunSlope(
+        run.name(),
+        gauge.name(),
+        load.name(),
+        gauge.instrument(),
+        load.instrument(),
+        list,
+        slope,
+        error,
+        intercepts,
+        range.lower() * peak,
+        range.upper() * peak,
+        quality);
+  }
+
+  /** Several loads that move independently: one regression, a column for each load. */
+  private List<RunSlope> several(int gauge, List<Integer> varied) {
+    Channel gaugeChannel = run.gauges().get(gauge);
+    List<double[]> rows = new ArrayList<>();
+    List<Double> motions = new ArrayList<>();
+    for (StepGrouping.RawStep step : steps) {
+      if (step.counts[gauge] > 0) {
+        double[] row = new double[varied.size() + 1];
+        for (int k = 0; k < varied.size(); k++) {
+          row[k] = step.load[varied.get(k)];
+        }
+        row[varied.size()] = 1;
+        rows.add(row);
+        motions.add(step.motion[gauge]);
+      }
+    }
+    List<RunSlope> result = new ArrayList<>();
+    Optional<Regression> fit = Optional.empty();
+    try {
+      fit =
+          Optional.of(
+              Regression.fit(
+                  rows.toArray(double[][]::new),
+                  motions.stream().mapToDouble(Double::doubleValue).toArray()));
+    } catch (Regression.DependentColumns | IllegalArgumentException tooFew) {
+      findings.add(
+          ReduceFinding.TOO_FEW_STEPS,
+          gaugeChannel.where(),
+          rows.size() + " steps of '" + gaugeChannel.name() + "' in run '" + run.name()
+              + "' are too few to tell " + varied.size() + " loads apart");
+    }
+    for (int k = 0; k < varied.size(); k++) {
+      double[] column = column(varied.get(k));
+      Branches branches = Branches.of(column);
+      cycles = Math.max(cycles, branches.cycles());
+      List<LoadStep> list = fated(gauge, column, branches, new FitRange(0, 1));
+      double peak = java.util.Arrays.stream(column).map(Math::abs).max().orElse(0);
+      int index = k;
+      Channel load = run.loads().get(varied.get(k));
+      result.add(
+          new RunSlope(
+              run.name(),
+              gaugeChannel.name(),
+              load.name(),
+              gaugeChannel.instrument(),
+              load.instrument(),
+              list.stream()
+                  .map(s -> s.fate() == Fate.BEDDING_IN ? s.withFate(Fate.FITTED) : s)
+                  .toList(),
+              fit.map(f -> f.coefficients()[index]).orElse(Double.NaN),
+              fit.map(f -> f.standardError(index)).orElse(Double.NaN),
+              Map.of(),
+              0,
+              peak,
+              Optional.empty()));
+    }
+    return result;
+  }
+}

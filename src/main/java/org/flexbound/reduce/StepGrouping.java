@@ -1,0 +1,144 @@
+package org.flexbound.reduce;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.flexbound.finding.Where;
+import org.flexbound.testlog.Reading;
+import org.flexbound.testlog.Run;
+
+/**
+ * Groups the readings of a run into steps: rows in sequence with one step label, or, without labels,
+ * at one held load. Streams; keeps a mean and a scatter for each step and gauge.
+ */
+final class StepGrouping {
+  /** Loads within this share of the run's range are one held load. */
+  private static final double HELD = 0.01;
+
+  private final Run run;
+  private final double[] tolerance;
+  private final List<RawStep> steps = new ArrayList<>();
+  private final List<Exclusion> excluded = new ArrayList<>();
+
+  /** A step of all channels. */
+  static final class RawStep {
+    final String label;
+    final double[] load;
+    final double[] motion;
+    final double[] squares;
+    final int[] counts;
+    final Where[] where;
+    int readings;
+
+    RawStep(String label, int loads, int gauges) {
+      this.label = label;
+      this.load = new double[loads];
+      this.motion = new double[gauges];
+      this.squares = new double[gauges];
+      this.counts = new int[gauges];
+      this.where = new Where[gauges];
+    }
+
+    /** Welford's updating of mean and sum of squares (Technometrics 4, 1962, 419). */
+    void add(Reading reading) {
+      readings++;
+      for (int l = 0; l < load.length; l++) {
+        load[l] += (reading.load(l) - load[l]) / readings;
+      }
+      for (int g = 0; g < motion.length; g++) {
+        double value = reading.gauge(g);
+        if (Double.isNaN(value)) {
+          continue;
+        }
+        if (counts[g]++ == 0) {
+          where[g] = reading.whereGauge(g);
+        }
+        double before = value - motion[g];
+        motion[g] += before / counts[g];
+        squares[g] += before * (value - motion[g]);
+      }
+    }
+
+    double motion(int gauge) {
+      return counts[gauge] == 0 ? Double.NaN : motion[gauge];
+    }
+
+    double scatter(int gauge) {
+      return counts[gauge] < 2 ? 0 : Math.sqrt(squares[gauge] / (counts[gauge] - 1));
+    }
+  }
+
+  private StepGrouping(Run run, double[] tolerance) {
+    this.run = run;
+    this.tolerance = tolerance;
+  }
+
+  static StepGrouping of(Run run) {
+    int loads = run.loads().size();
+    double[] low = new double[loads];
+    double[] high = new double[loads];
+    java.util.Arrays.fill(low, Double.POSITIVE_INFINITY);
+    java.util.Arrays.fill(high, Double.NEGATIVE_INFINITY);
+    run.readings()
+        .forEach(
+            reading -> {
+              for (int l = 0; l < loads; l++) {
+                double value = reading.load(l);
+                if (reading.use() && !Double.isNaN(value)) {
+                  low[l] = Math.min(low[l], value);
+                  high[l] = Math.max(high[l], value);
+                }
+              }
+            });
+    double[] tolerance = new double[loads];
+    for (int l = 0; l < loads; l++) {
+      tolerance[l] = high[l] > low[l] ? HELD * (high[l] - low[l]) : 0;
+    }
+    StepGrouping grouping = new StepGrouping(run, tolerance);
+    run.readings().forEach(grouping::add);
+    return grouping;
+  }
+
+  private void add(Reading reading) {
+    for (int l = 0; l < run.loads().size(); l++) {
+      if (Double.isNaN(reading.load(l)) && reading.use()) {
+        excluded.add(
+            new Exclusion(
+                run.name(), "row", reading.whereLoad(l), "no load was read", false, 1));
+        return;
+      }
+    }
+    if (!reading.use()) {
+      String reason = reading.remark().isEmpty() ? "column Use says no" : reading.remark();
+      Where where =
+          run.gauges().isEmpty() ? reading.whereLoad(0) : reading.whereGauge(0);
+      excluded.add(new Exclusion(run.name(), "row", where, reason, true, 1));
+      return;
+    }
+    RawStep last = steps.isEmpty() ? null : steps.get(steps.size() - 1);
+    if (last == null || !belongs(last, reading)) {
+      last = new RawStep(reading.step(), run.loads().size(), run.gauges().size());
+      steps.add(last);
+    }
+    last.add(reading);
+  }
+
+  private boolean belongs(RawStep step, Reading reading) {
+    if (!step.label.isEmpty() || !reading.step().isEmpty()) {
+      return step.label.equals(reading.step());
+    }
+    for (int l = 0; l < step.load.length; l++) {
+      if (Math.abs(reading.load(l) - step.load[l]) > tolerance[l]) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  List<RawStep> steps() {
+    return steps;
+  }
+
+  List<Exclusion> excluded() {
+    return excluded;
+  }
+}

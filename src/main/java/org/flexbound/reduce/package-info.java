@@ -1,0 +1,24 @@
+/**
+ * The reduction: readings to flexibility coefficients, with a verdict on every run.
+ *
+ * <p>In: a test log, and where the nodes of a model stand if there is one. Out: {@link
+ * org.flexbound.reduce.Reduction}. SI units; a motion is positive along the gauge's direction, a
+ * load along its own.
+ *
+ * <ol>
+ *   <li>Rows at one held load become a step: their mean.
+ *   <li>Turning points of the load part the steps into branches and cycles; the first cycle is left
+ *       out where there are others.
+ *   <li>In each run a line with one slope and an intercept for each branch is fitted to the steps
+ *       within the fit range (several loads that move independently: multiple regression).
+ *   <li>Over runs the slopes are averaged; scatter is pooled over all absolute coefficients by a
+ *       variance model (floor and share).
+ *   <li>Calibration enters as gains of instruments, shared by all that they read; fixed floors as
+ *       √2·u₀/ΔP for a gauge and relative √2·u₀/ΔP for a load.
+ *   <li>Base motion is taken out by a linear map, only where the base gauges determine it.
+ * </ol>
+ */
+@NullMarked
+package org.flexbound.reduce;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,170 @@
+package org.flexbound.reduce;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
+
+import java.util.Map;
+import java.util.Optional;
+import java.util.Random;
+import org.flexbound.finding.Finding;
+import org.flexbound.finding.Outcome;
+import org.flexbound.flexibility.Coefficient;
+import org.flexbound.setup.Direction;
+import org.flexbound.setup.Station;
+import org.flexbound.setup.Vector;
+import org.flexbound.testlog.TestLogMaker;
+import org.junit.jupiter.api.Test;
+
+class ReducerTest {
+  private static final Direction DOWN = Direction.along(new Vector(0, 0, -1));
+
+  private static final Map<String, Vector> NODES =
+      Map.of(
+          "A", new Vector(1, 0, 0),
+          "B", new Vector(2, 0, 0),
+          "base1", new Vector(0, 0, 0),
+          "base2", new Vector(0, 1, 0),
+          "base3", new Vector(-1, 0, 0));
+
+  private static final Places PLACES =
+      station ->
+          station instanceof Station.AtNode node
+              ? Optional.ofNullable(NODES.get(node.node()))
+              : Optional.empty();
+
+  /** Up and down once in ten steps, each gauge following its slope with an offset and scatter. */
+  private static double[][] rows(double[] slopes, double scatter, Random random) {
+    double[][] rows = new double[11][slopes.length + 1];
+    for (int k = 0; k < rows.length; k++) {
+      double load = 1000 * (k <= 5 ? k : 10 - k) / 5.0;
+      rows[k][0] = load;
+      for (int g = 0; g < slopes.length; g++) {
+        rows[k][g + 1] = 0.001 + slopes[g] * load + scatter * random.nextGaussian();
+      }
+    }
+    return rows;
+  }
+
+  private static Reduction reduce(TestLogMaker maker) {
+    Outcome<Reduction> outcome =
+        Reducer.reduce(new ReductionProblem("as tested", maker.log(), PLACES));
+    assertThat(outcome.hasErrors()).as(outcome.findings().toString()).isFalse();
+    return outcome.value().orElseThrow();
+  }
+
+  private static TestLogMaker twoByTwo(double[][] a, double scatter, int runs) {
+    Random random = new Random(7);
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0.01, 0, 0)
+            .instrument("dial", 0.002, 1e-6, 0)
+            .load("LA", "A", DOWN, "cell")
+            .load("LB", "B", DOWN, "cell")
+            .gauge("GA", "A", DOWN, "dial", false)
+            .gauge("GB", "B", DOWN, "dial", false);
+    for (int run = 0; run < runs; run++) {
+      maker.run("A" + run, "LA", rows(new double[] {a[0][0], a[1][0]}, scatter, random));
+      maker.run("B" + run, "LB", rows(new double[] {a[0][1], a[1][1]}, scatter, random));
+    }
+    return maker;
+  }
+
+  @Test
+  void exactReadingsGiveTheExactCoefficients() {
+    double[][] a = {{2e-6, 5e-6}, {5e-6, 16e-6}};
+    Reduction reduction = reduce(twoByTwo(a, 0, 1));
+    for (Coefficient c : reduction.flexibility().coefficients()) {
+      assertThat(c.value()).isCloseTo(a[c.gauge()][c.load()], within(1e-18));
+    }
+    assertThat(reduction.runs()).allMatch(run -> run.verdict() == RunVerdict.ACCEPT);
+    assertThat(reduction.withoutSpread()).isTrue();
+    assertThat(reduction.findings()).extracting(Finding::code).containsExactly("RED-ONE-RUN");
+  }
+
+  @Test
+  void calibrationOfTheCellEntersEveryCoefficientAsOneGain() {
+    double[][] a = {{2e-6, 5e-6}, {5e-6, 16e-6}};
+    Reduction reduction = reduce(twoByTwo(a, 1e-7, 3));
+    Coefficient c = reduction.flexibility().coefficients().get(0);
+    double floor = Math.sqrt(2) * 1e-6 / 800;
+    double expected =
+        Math.sqrt(
+            Math.pow(c.value() * Math.hypot(0.01, 0.002), 2)
+                + floor * floor
+                + Math.pow(
+                    reduction.flexibility().absolute().get(0).scatterUncertainty(), 2));
+    assertThat(c.standardUncertainty()).isCloseTo(expected, within(1e-12 * expected));
+    assertThat(reduction.flexibility().gains()).hasSize(2);
+  }
+
+  @Test
+  void reciprocityHoldsOnGoodDataAndFailsOnAMisreadGauge() {
+    double[][] good = {{2e-6, 5e-6}, {5e-6, 16e-6}};
+    assertThat(reduce(twoByTwo(good, 1e-8, 3)).reciprocity().pairs()).hasSize(1);
+    assertThat(reduce(twoByTwo(good, 1e-8, 3)).findings())
+        .extracting(Finding::code)
+        .doesNotContain("RED-NOT-RECIPROCAL");
+    double[][] bad = {{2e-6, 5e-6}, {6e-6, 16e-6}};
+    assertThat(reduce(twoByTwo(bad, 1e-8, 3)).findings())
+        .extracting(Finding::code)
+        .contains("RED-NOT-RECIPROCAL");
+  }
+
+  @Test
+  void rockingOfTheBaseIsTakenOut() {
+    double settle = 1e-6;
+    double rock = 3e-6;
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0.01, 0, 0)
+            .instrument("dial", 0.002, 0, 0)
+            .load("LB", "B", DOWN, "cell")
+            .gauge("GB", "B", DOWN, "dial", false)
+            .gauge("b1", "base1", DOWN, "dial", true)
+            .gauge("b2", "base2", DOWN, "dial", true)
+            .gauge("b3", "base3", DOWN, "dial", true);
+    double[] slopes = {16e-6 + settle + 2 * rock, settle, settle, settle - rock};
+    maker.run("1", "LB", rows(slopes, 0, new Random(1)));
+    Reduction reduction = reduce(maker);
+    assertThat(reduction.flexibility().coefficients()).hasSize(1);
+    assertThat(reduction.flexibility().coefficients().get(0).value())
+        .isCloseTo(16e-6, within(1e-15));
+    assertThat(reduction.baseMotionShare().get("GB|LB")).isCloseTo(7.0 / 23, within(1e-9));
+  }
+
+  @Test
+  void aSingleBaseGaugeDoesNotDetermineRocking() {
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0.01, 0, 0)
+            .instrument("dial", 0.002, 0, 0)
+            .load("LB", "B", DOWN, "cell")
+            .gauge("GB", "B", DOWN, "dial", false)
+            .gauge("b1", "base1", DOWN, "dial", true);
+    maker.run("1", "LB", rows(new double[] {17e-6, 1e-6}, 0, new Random(1)));
+    Reduction reduction = reduce(maker);
+    assertThat(reduction.flexibility().coefficients().get(0).value())
+        .isCloseTo(17e-6, within(1e-15));
+    assertThat(reduction.findings()).extracting(Finding::code).contains("RED-BASE-MOTION-LEFT");
+  }
+
+  @Test
+  void theFirstOfTwoCyclesIsLeftOut() {
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0, 0, 0)
+            .instrument("dial", 0, 0, 0)
+            .load("LA", "A", DOWN, "cell")
+            .gauge("GA", "A", DOWN, "dial", false);
+    double[][] first = rows(new double[] {9e-6}, 0, new Random(1));
+    double[][] second = rows(new double[] {2e-6}, 0, new Random(1));
+    double[][] both = new double[22][];
+    System.arraycopy(first, 0, both, 0, 11);
+    System.arraycopy(second, 0, both, 11, 11);
+    maker.run("1", "LA", both);
+    Reduction reduction = reduce(maker);
+    assertThat(reduction.flexibility().coefficients().get(0).value())
+        .isCloseTo(2e-6, within(1e-15));
+    assertThat(reduction.runs().get(0).cycles()).isEqualTo(2);
+  }
+}
