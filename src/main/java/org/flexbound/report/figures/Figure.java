@@ -15,19 +15,16 @@ import java.util.Locale;
 public record Figure(
     String id, String heading, String caption, int width, int height, String svg) {
   /**
-   * The graphic, no wider than so much.
+   * The graphic, drawn no wider than so much.
    *
    * @param widest the width that there is, in CSS pixels
-   * @return the {@code svg} element with its width and height set
+   * @return the {@code svg} element with the size at which it is to be drawn as its style
    */
   public String within(int widest) {
     double factor = Math.min(1.0, (double) widest / width);
-    String size =
+    String style =
         String.format(
-            Locale.ROOT, "width=\"%.1f\" height=\"%.1f\"", factor * width, factor * height);
-    int end = svg.indexOf('>');
-    String root =
-        svg.substring(0, end).replaceAll(" (width|height)=\"[^\"]*\"", "").replace("<svg", "<svg " + size);
-    return root + svg.substring(end);
+            Locale.ROOT, "style=\"width: %.1fpx; height: %.1fpx\"", factor * width, factor * height);
+    return svg.replaceFirst("<svg ", "<svg " + style + " ");
   }
 }
