@@ -15,7 +15,12 @@ final class LeastWork implements Ordering {
 
   @Override
   public int[] order(Graph graph) {
-    int[] degree = Ordering.minimumDegree().order(graph);
+    MinimumDegree process = new MinimumDegree(graph);
+    int[] degree = process.order();
+    double n = graph.vertexCount();
+    if (process.mostOperations() <= WORTH_DISSECTING * n || graph.neighbours.length > NestedDissection.DENSE * n * n) {
+      return degree;
+    }
     double work = operations(graph, degree);
     if (work <= WORTH_DISSECTING * graph.vertexCount()) {
       return degree;

@@ -37,19 +37,19 @@ final class MinimumDegree {
   private final int[] stamp;
   /** What an absorbed vertex or element was absorbed into. */
   private final int[] parent;
-  private final int[] head;
+  private final DegreeLists degrees;
+  /** The next variable of the same hash. */
   private final int[] next;
-  private final int[] previous;
   private final int[] hashHead;
   private final int[] hash;
   private int tag = 1;
-  private int leastDegree;
   /** Weight of all vertices but those set aside. */
   private int present;
   private int eliminated;
   /** Elements in the order of their creation. */
   private final int[] pivots;
   private int pivotCount;
+  private double mostOperations;
 
   MinimumDegree(Graph graph) {
     this(graph, graph.vertexCount());
@@ -75,14 +75,11 @@ final class MinimumDegree {
     isElement = new boolean[n];
     stamp = new int[n];
     parent = new int[n];
-    head = new int[total + 1];
     next = new int[n];
-    previous = new int[n];
     hashHead = new int[n];
     hash = new int[n];
     pivots = new int[n];
     Arrays.fill(parent, NONE);
-    Arrays.fill(head, NONE);
     Arrays.fill(hashHead, NONE);
     Arrays.fill(stamp, 1);
     for (int v = 0; v < n; v++) {
@@ -91,6 +88,7 @@ final class MinimumDegree {
         degree[v] += weight[lists[p]];
       }
     }
+    degrees = new DegreeLists(n, total);
   }
 
   int[] order() {
@@ -98,7 +96,7 @@ final class MinimumDegree {
     int live = 0;
     for (int v = inner - 1; v >= 0; v--) {
       if (weight[v] > 0) {
-        enlist(v);
+        degrees.add(v, degree[v]);
         live += weight[v];
       }
     }
@@ -107,9 +105,14 @@ final class MinimumDegree {
       present += weight[v];
     }
     while (eliminated < live) {
-      eliminate(nextPivot());
+      eliminate(degrees.takeLeast());
     }
-    return collect(dense);
+    return new AbsorptionTree(parent, isElement, pivots, pivotCount).order(dense, inner);
+  }
+
+  /** No fewer operations than the factorization in the order found takes. */
+  double mostOperations() {
+    return mostOperations;
   }
 
   /** Marks vertices of very high degree (weight negated, out of all lists) so that they are ordered last. */
@@ -143,38 +146,6 @@ final class MinimumDegree {
     return Arrays.copyOf(dense, count);
   }
 
-  private void enlist(int v) {
-    int d = degree[v];
-    int first = head[d];
-    next[v] = first;
-    previous[v] = NONE;
-    if (first != NONE) {
-      previous[first] = v;
-    }
-    head[d] = v;
-    leastDegree = Math.min(leastDegree, d);
-  }
-
-  private void delist(int v) {
-    if (next[v] != NONE) {
-      previous[next[v]] = previous[v];
-    }
-    if (previous[v] != NONE) {
-      next[previous[v]] = next[v];
-    } else {
-      head[degree[v]] = next[v];
-    }
-  }
-
-  private int nextPivot() {
-    while (head[leastDegree] == NONE) {
-      leastDegree++;
-    }
-    int pivot = head[leastDegree];
-    delist(pivot);
-    return pivot;
-  }
-
   private void eliminate(int pivot) {
     int pivotWeight = weight[pivot];
     eliminated += pivotWeight;
@@ -202,6 +173,8 @@ final class MinimumDegree {
     mergeAlike(from, to);
     finish(pivot, from, to, remaining);
     weight[pivot] = pivotWeight;
+    double front = (double) pivotWeight + remaining;
+    mostOperations += pivotWeight * front * front;
     if (length[pivot] == 0) {
       stamp[pivot] = 0;
     }
@@ -264,7 +237,7 @@ final class MinimumDegree {
     int w = weight[v];
     weight[v] = -w;
     if (v < inner) {
-      delist(v);
+      degrees.remove(v);
     }
     return w;
   }
@@ -420,7 +393,7 @@ final class MinimumDegree {
       weight[v] = w;
       degree[v] = Math.max(0, Math.min(degree[v] + size - w, left - w));
       if (v < inner) {
-        enlist(v);
+        degrees.add(v, degree[v]);
       }
       lists[write++] = v;
     }
@@ -452,57 +425,5 @@ final class MinimumDegree {
     }
     lists = packed;
     free = count;
-  }
-
-  /** The order of elimination: the tree of absorbed vertices in postorder, each element's own vertices together, dense ones last. */
-  private int[] collect(int[] dense) {
-    // A variable hangs below the element that eliminated it; skip the variables in between.
-    int[] element = new int[n];
-    for (int v = 0; v < n; v++) {
-      element[v] = v;
-    }
-    for (int v = 0; v < n; v++) {
-      int e = v;
-      while (!isElement[e] && parent[e] != NONE) {
-        e = parent[e];
-      }
-      int top = e;
-      e = v;
-      while (!isElement[e] && parent[e] != NONE) {
-        int up = parent[e];
-        parent[e] = top;
-        e = up;
-      }
-      element[v] = top;
-    }
-    int[] tree = new int[n];
-    Arrays.fill(tree, NONE);
-    for (int k = 0; k < pivotCount; k++) {
-      tree[pivots[k]] = parent[pivots[k]];
-    }
-    int[] firstMember = new int[n];
-    int[] nextMember = new int[n];
-    Arrays.fill(firstMember, NONE);
-    for (int v = n - 1; v >= 0; v--) {
-      nextMember[v] = firstMember[element[v]];
-      firstMember[element[v]] = v;
-    }
-    boolean[] isDense = new boolean[n];
-    for (int v : dense) {
-      isDense[v] = true;
-    }
-    int[] order = new int[inner];
-    int count = 0;
-    for (int e : Trees.postorder(tree, pivots, pivotCount)) {
-      for (int v = firstMember[e]; v != NONE; v = nextMember[v]) {
-        if (!isDense[v]) {
-          order[count++] = v;
-        }
-      }
-    }
-    for (int v : dense) {
-      order[count++] = v;
-    }
-    return order;
   }
 }

@@ -16,7 +16,8 @@ import java.util.Random;
 final class NestedDissection implements Ordering {
   /** Regions of at most so many vertices are not split; between 80 and 250 the fill of lattices differs by one or two per cent. */
   private static final int LEAF = 120;
-  private static final int BISECTIONS = 2;
+  /** Regions with more than this part of all possible edges have no small separators; they are not split. */
+  static final double DENSE = 0.2;
   private static final int LEVEL_STRUCTURES = 5;
 
   private final long seed;
@@ -61,6 +62,10 @@ final class NestedDissection implements Ordering {
         continue;
       }
       WeightedGraph inside = inside(graph, region.vertices, local);
+      if (inside.ends.length > DENSE * inside.count * inside.count) {
+        finish(graph, region, local, order);
+        continue;
+      }
       byte[] side = components(inside);
       if (side.length == 0) {
         side = best(inside, random);
@@ -85,21 +90,18 @@ final class NestedDissection implements Ordering {
     return order;
   }
 
-  /** The best of several separators: from multilevel bisections and from breadth-first levels, both refined. */
+  /** The best of several separators: from a multilevel bisection and from breadth-first levels, all refined. */
   private static byte[] best(WeightedGraph graph, Random random) {
-    byte[] best = new byte[0];
-    double bestCost = Double.POSITIVE_INFINITY;
-    for (int t = 0; t < BISECTIONS; t++) {
-      byte[] side = new Bisection(random).separate(graph);
-      double cost = new Separator(graph, side).cost();
-      if (cost < bestCost) {
-        bestCost = cost;
-        best = side;
-      }
-    }
+    byte[] best = new Bisection(random).separate(graph);
+    double bestCost = new Separator(graph, best).cost();
     LevelStructure levels = new LevelStructure(graph);
+    boolean[] tried = new boolean[graph.count];
     for (int t = 0; t < LEVEL_STRUCTURES; t++) {
       int root = levels.farthest(levels.farthest(random.nextInt(graph.count)));
+      if (tried[root]) {
+        continue;
+      }
+      tried[root] = true;
       Separator separator = new Separator(graph, levels.separate(root));
       separator.refine();
       if (separator.cost() < bestCost) {

@@ -13,10 +13,17 @@ final class OrderChoice {
   private static final int FEW = 3_000;
   private static final double SLENDER = 1e4;
 
-  private OrderChoice() {}
-
   /** The unknowns in the order of elimination. */
-  static int[] choose(SparsePattern pattern, int[] group, Ordering ordering) {
+  final int[] order;
+  /** Tree and counts in that order. */
+  final ColumnCounts counts;
+
+  private OrderChoice(SparsePattern pattern, int[] order) {
+    this.order = order;
+    counts = lowerRows(pattern, order);
+  }
+
+  static OrderChoice choose(SparsePattern pattern, int[] group, Ordering ordering) {
     int n = pattern.size();
     int[] number = new int[n];
     Arrays.fill(number, -1);
@@ -29,11 +36,11 @@ final class OrderChoice {
       member[i] = number[group[i]];
     }
     Graph graph = Graph.of(pattern, member, groups);
-    int[] byGroups = expand(ordering.order(graph), member, groups);
+    OrderChoice byGroups = new OrderChoice(pattern, expand(ordering.order(graph), member, groups));
     if (groups == n || fullness(pattern, graph) > SPARSE_BLOCKS) {
       return byGroups;
     }
-    double work = lowerRows(pattern, byGroups).operations();
+    double work = byGroups.counts.operations();
     if (n > FEW && work > SLENDER * n) {
       return byGroups;
     }
@@ -41,8 +48,8 @@ final class OrderChoice {
     for (int i = 0; i < n; i++) {
       alone[i] = i;
     }
-    int[] byUnknowns = ordering.order(Graph.of(pattern, alone, n));
-    return lowerRows(pattern, byUnknowns).operations() < work ? byUnknowns : byGroups;
+    OrderChoice byUnknowns = new OrderChoice(pattern, ordering.order(Graph.of(pattern, alone, n)));
+    return byUnknowns.counts.operations() < work ? byUnknowns : byGroups;
   }
 
   private static int[] expand(int[] groupOrder, int[] member, int groups) {
@@ -75,7 +82,7 @@ final class OrderChoice {
   }
 
   /** Elimination tree and column counts of a pattern under an order. */
-  static ColumnCounts lowerRows(SparsePattern pattern, int[] order) {
+  private static ColumnCounts lowerRows(SparsePattern pattern, int[] order) {
     int n = pattern.size();
     int[] at = Trees.inverse(order);
     int[] cs = pattern.starts();

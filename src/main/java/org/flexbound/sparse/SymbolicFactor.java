@@ -33,39 +33,57 @@ public final class SymbolicFactor {
   final int[] childStarts;
   final int[] children;
 
-  private SymbolicFactor(SparsePattern pattern, FactorSettings settings, int[] firstOrder) {
+  private SymbolicFactor(SparsePattern pattern, FactorSettings settings, OrderChoice choice) {
     this.pattern = pattern;
     this.settings = settings;
-    ColumnCounts counts = OrderChoice.lowerRows(pattern, firstOrder);
-    nonzeros = counts.nonzeros();
-    operations = counts.operations();
-    SupernodeTree tree = new SupernodeTree(counts);
-    int n = firstOrder.length;
+    nonzeros = choice.counts.nonzeros();
+    operations = choice.counts.operations();
+    SupernodeTree tree = new SupernodeTree(choice.counts);
+    int n = choice.order.length;
     order = new int[n];
     for (int k = 0; k < n; k++) {
-      order[k] = firstOrder[tree.columnOrder[k]];
+      order[k] = choice.order[tree.columnOrder[k]];
     }
     places = Trees.inverse(order);
     starts = tree.starts;
     parents = tree.parents;
     int supernodes = parents.length;
     childStarts = new int[supernodes + 1];
+    children = new int[supernodes];
+    collectChildren();
+    entrySources = new int[pattern.entryCount()];
+    entryTargets = new int[pattern.entryCount()];
+    int[] columnStarts = sortEntries();
+    entryStarts = new int[supernodes + 1];
+    for (int s = 0; s < supernodes; s++) {
+      entryStarts[s + 1] = columnStarts[starts[s + 1]];
+    }
+    rowStarts = new int[supernodes + 1];
+    rows = findRows();
+    relative = new int[rows.length];
+    place(columnStarts);
+  }
+
+  private void collectChildren() {
     for (int p : parents) {
       if (p >= 0) {
         childStarts[p + 1]++;
       }
     }
-    for (int s = 0; s < supernodes; s++) {
+    for (int s = 0; s < parents.length; s++) {
       childStarts[s + 1] += childStarts[s];
     }
-    children = new int[childStarts[supernodes]];
     int[] next = childStarts.clone();
-    for (int s = 0; s < supernodes; s++) {
+    for (int s = 0; s < parents.length; s++) {
       if (parents[s] >= 0) {
         children[next[parents[s]]++] = s;
       }
     }
-    // Entries by column of the factor.
+  }
+
+  /** Sorts the matrix's entries by column of the factor, with the row of each as its target; returns where columns begin. */
+  private int[] sortEntries() {
+    int n = order.length;
     int[] cs = pattern.starts();
     int[] rs = pattern.rowIndices();
     int[] columnStarts = new int[n + 1];
@@ -78,8 +96,6 @@ public final class SymbolicFactor {
       columnStarts[j + 1] += columnStarts[j];
     }
     int[] at = columnStarts.clone();
-    entrySources = new int[rs.length];
-    entryTargets = new int[rs.length];
     for (int j = 0; j < n; j++) {
       for (int p = cs[j]; p < cs[j + 1]; p++) {
         int a = places[j];
@@ -89,25 +105,28 @@ public final class SymbolicFactor {
         entryTargets[q] = Math.max(a, b);
       }
     }
-    entryStarts = new int[supernodes + 1];
-    rowStarts = new int[supernodes + 1];
-    int[] found = new int[Math.max(16, 8 * supernodes)];
+    return columnStarts;
+  }
+
+  /** The rows below every supernode: those of its own entries and of its children. */
+  private int[] findRows() {
+    int n = order.length;
+    int[] found = new int[Math.max(16, 8 * parents.length)];
     int[] mark = new int[n];
     Arrays.fill(mark, -1);
-    for (int s = 0; s < supernodes; s++) {
+    for (int s = 0; s < parents.length; s++) {
       int end = starts[s + 1];
       int from = rowStarts[s];
       int count = from;
-      entryStarts[s + 1] = columnStarts[end];
-      int most = columnStarts[end] - columnStarts[starts[s]];
+      long most = (long) entryStarts[s + 1] - entryStarts[s];
       for (int k = childStarts[s]; k < childStarts[s + 1]; k++) {
-        most += rowStarts[children[k] + 1] - rowStarts[children[k]];
+        most += (long) rowStarts[children[k] + 1] - rowStarts[children[k]];
       }
       most = Math.min(most, n - end);
       if (count + most > found.length) {
-        found = Arrays.copyOf(found, Math.addExact(count + most, found.length / 2));
+        found = Arrays.copyOf(found, Math.toIntExact(count + most + found.length / 2));
       }
-      for (int q = columnStarts[starts[s]]; q < columnStarts[end]; q++) {
+      for (int q = entryStarts[s]; q < entryStarts[s + 1]; q++) {
         int row = entryTargets[q];
         if (row >= end && mark[row] != s) {
           mark[row] = s;
@@ -126,9 +145,7 @@ public final class SymbolicFactor {
       Arrays.sort(found, from, count);
       rowStarts[s + 1] = count;
     }
-    rows = Arrays.copyOf(found, rowStarts[supernodes]);
-    relative = new int[rows.length];
-    place(columnStarts);
+    return Arrays.copyOf(found, rowStarts[parents.length]);
   }
 
   /** Finds the positions of entries and of children's rows in the fronts. */
