@@ -15,6 +15,11 @@ public final class EigenSolver {
   /** The projected problem is solved again when the basis has grown by this part of its size. */
   private static final int CHECK_GROWTH = 10;
 
+  /** A pivot smaller than this part of its diagonal may be a zero blurred by rounding: the shift is lowered then, twice at most. */
+  private static final double SOUND = 1e-10;
+
+  private static final int ATTEMPTS = 12;
+
   private final EigenSettings settings;
   private final FactorSettings factorSettings;
 
@@ -115,14 +120,14 @@ public final class EigenSolver {
     for (int attempt = 0;; attempt++) {
       try {
         NumericFactor factor = symbolic.shifted(k, shift, m);
-        if (factor.negativePivots() == 0) {
+        if (factor.negativePivots() == 0 && (factor.leastPivotRatio() > SOUND || attempt >= 2)) {
           return new Shifted(factor, shift);
         }
-        if (attempt > 12) {
+        if (attempt > ATTEMPTS) {
           throw new IllegalArgumentException("no shift below all eigenvalues found down to " + shift);
         }
       } catch (PivotBreakdownException e) {
-        if (attempt > 12) {
+        if (attempt > ATTEMPTS) {
           throw e;
         }
       }

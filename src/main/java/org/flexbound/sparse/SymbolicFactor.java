@@ -11,6 +11,9 @@ import java.util.Arrays;
  * of elimination. Its front is the dense matrix of its columns and rows.
  */
 public final class SymbolicFactor {
+  /** Numbers that one array may hold. */
+  private static final long LARGEST_BLOCK = Integer.MAX_VALUE - 64;
+
   private final SparsePattern pattern;
   private final FactorSettings settings;
   private final long nonzeros;
@@ -154,7 +157,10 @@ public final class SymbolicFactor {
     for (int s = 0; s < parents.length; s++) {
       int width = starts[s + 1] - starts[s];
       int height = height(s);
-      Math.toIntExact(Panel.size(width, height));
+      if (Math.max(Panel.size(width, height), update(s)) > LARGEST_BLOCK) {
+        throw new IllegalArgumentException("the factor would need a dense block of " + height + " rows and " + width
+            + " columns, more numbers than one array holds; the matrix is too densely coupled for a direct factor");
+      }
       for (int j = 0; j < width; j++) {
         local[starts[s] + j] = j;
       }
@@ -195,7 +201,8 @@ public final class SymbolicFactor {
    * @param group the group (node) of every unknown, any numbers from 0 to size - 1; a group's unknowns are coupled to much the same others,
    *     and ordering the groups is quicker and often better than ordering the unknowns
    * @param settings how
-   * @throws IllegalArgumentException if there is not one group number for each unknown, from 0 to size - 1
+   * @throws IllegalArgumentException if there is not one group number for each unknown, from 0 to size - 1, or if the factor would have a
+   *     dense block of more than 2³¹ numbers
    */
   public static SymbolicFactor analyze(SparsePattern pattern, int[] group, FactorSettings settings) {
     int n = pattern.size();
