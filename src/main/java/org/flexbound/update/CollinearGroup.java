@@ -12,7 +12,8 @@ import java.util.List;
  * @param standardDeviation its posterior standard deviation
  * @param lower95 lower end of its 95 % interval
  * @param upper95 upper end
- * @param determined whether more than 90 % of its prior variance was removed
+ * @param determined whether more than 90 % of its prior variance was removed; where not, there are
+ *     no weights and the numbers are 0
  * @param inWords the combination for people, e.g. {@code knee^0.71 · base^0.70 = 0.62}
  */
 public record CollinearGroup(

@@ -40,10 +40,12 @@ final class LeaveOut {
     CommonOps_DDRM.multAddTransB(jacobian, jacobian, whole);
     this.inverse = inverse(whole);
     this.weighted = times(inverse, residuals);
-    DMatrixRMaj gains =
-        CommonOps_DDRM.extract(jacobian, 0, jacobian.numRows, parameters, jacobian.numCols);
     DMatrixRMaj noise = covariance.copy();
-    CommonOps_DDRM.multAddTransB(gains, gains, noise);
+    if (jacobian.numCols > parameters) {
+      DMatrixRMaj gains =
+          CommonOps_DDRM.extract(jacobian, 0, jacobian.numRows, parameters, jacobian.numCols);
+      CommonOps_DDRM.multAddTransB(gains, gains, noise);
+    }
     DMatrixRMaj inverted = inverse(noise);
     this.noiseInverse = new double[residuals.length];
     for (int i = 0; i < residuals.length; i++) {
@@ -135,6 +137,26 @@ final class LeaveOut {
           shift[u] -= jacobian.get(row, u) * back[row];
         }
       }
+    }
+
+    private Left(double[] errors, DMatrixRMaj covariance, double[] shift) {
+      this.errors = errors;
+      this.covariance = covariance;
+      this.shift = shift;
+    }
+
+    /** Some of what was left out, by its places within it; the rest stays left out. */
+    Left part(List<Integer> places) {
+      int n = places.size();
+      double[] some = new double[n];
+      DMatrixRMaj block = new DMatrixRMaj(n, n);
+      for (int i = 0; i < n; i++) {
+        some[i] = errors[places.get(i)];
+        for (int k = 0; k < n; k++) {
+          block.set(i, k, covariance.get(places.get(i), places.get(k)));
+        }
+      }
+      return new Left(some, block, shift);
     }
 
     /** The sum of squares of the errors under their covariance. */

@@ -3,6 +3,7 @@ package org.flexbound.update;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.NavigableMap;
 import java.util.TreeMap;
 
 /**
@@ -67,8 +68,8 @@ final class ProfileTracer {
       double high,
       double oneSidedLow,
       double oneSidedHigh,
-      TreeMap<Double, Double> curve,
-      TreeMap<Double, Double> logVolume) {
+      NavigableMap<Double, Double> curve,
+      NavigableMap<Double, Double> logVolume) {
     boolean lowOpen() {
       return Double.isNaN(low);
     }
@@ -256,14 +257,14 @@ final class ProfileTracer {
       order.forEach(this::rise);
     }
 
-    TreeMap<Double, Double> rises() {
+    NavigableMap<Double, Double> rises() {
       TreeMap<Double, Double> result = new TreeMap<>();
       known.forEach((at, there) -> result.put(at, Math.max(there.objective - base, 0)));
       return result;
     }
 
     /** −½ ln det of the Hessian by the other unknowns (Laplace; Tierney &amp; Kadane 1986). */
-    TreeMap<Double, Double> volumes() {
+    NavigableMap<Double, Double> volumes() {
       TreeMap<Double, Double> result = new TreeMap<>();
       known.forEach((at, there) -> result.put(at, LogVolume.of(there, k, ridge)));
       return result;

@@ -13,7 +13,8 @@ final class TradeOff {
   /** Next to no prior: what the bounds alone allow. */
   static final double LEAST = 1e-6;
 
-  private static final double MOST = 1e6;
+  /** As good as no change at all; also stands for the nominal model itself. */
+  static final double MOST = 1e6;
   private static final int STEPS_PER_DECADE = 2;
 
   private final GaussNewton solver;
@@ -27,12 +28,22 @@ final class TradeOff {
   private final List<Double> grid;
 
   TradeOff(
-      GaussNewton solver, FittedModel model, FitQuality quality, int parameters, Minimum atOne) {
+      GaussNewton solver,
+      FittedModel model,
+      FitQuality quality,
+      int parameters,
+      Minimum atOne,
+      boolean whole) {
     this.solver = solver;
     this.model = model;
     this.quality = quality;
     this.parameters = parameters;
     minima.put(0.0, atOne);
+    if (!whole) {
+      at(Math.log(LEAST));
+      grid = List.copyOf(minima.keySet());
+      return;
+    }
     int steps = (int) Math.round(Math.log10(MOST / LEAST)) * STEPS_PER_DECADE;
     double step = Math.log(MOST / LEAST) / steps;
     int down = (int) Math.round(-Math.log(LEAST) / step);
@@ -67,11 +78,11 @@ final class TradeOff {
   }
 
   Minimum best() {
-    return minima.firstEntry().getValue();
+    return at(grid.get(0));
   }
 
   double bestWeight() {
-    return Math.exp(minima.firstKey());
+    return Math.exp(grid.get(0));
   }
 
   /**

@@ -10,7 +10,7 @@ import org.flexbound.study.Rule;
  *
  * @param rule the rule asked for
  * @param verdict how it ended
- * @param weight μ of the point shown
+ * @param weight μ of the point shown; 1e6 where it is the nominal model
  * @param distanceFromPrior distance of the point shown from the μ = 1 estimate, √Σ(Δx/s)²
  * @param parameters in the order of the study
  * @param gains the instrument gains
@@ -71,6 +71,40 @@ public record UpdateResult(
     withoutLoadCase = List.copyOf(withoutLoadCase);
     configurations = List.copyOf(configurations);
     findings = List.copyOf(findings);
+  }
+
+  /**
+   * The same result with its findings.
+   *
+   * @param newFindings what takes the findings' place
+   * @return the result
+   */
+  UpdateResult with(List<Finding> newFindings) {
+    return new UpdateResult(
+        rule,
+        verdict,
+        weight,
+        distanceFromPrior,
+        parameters,
+        gains,
+        nominal,
+        shown,
+        best,
+        widening,
+        scatterDegreesOfFreedom,
+        curve,
+        profiles,
+        groups,
+        singularValues,
+        rank,
+        correlation,
+        coefficients,
+        withoutLoadCase,
+        validation,
+        configurations,
+        unexplained,
+        convergence,
+        newFindings);
   }
 
   /**
