@@ -35,7 +35,10 @@ final class Posterior {
   Posterior(WhitenedModel.Linear linear, double[] w, int parameters) {
     int m = linear.residuals.length;
     int gains = w.length - parameters;
-    DMatrixRMaj x = CommonOps_DDRM.extract(linear.jacobian, 0, m, 0, parameters);
+    DMatrixRMaj x =
+        parameters == 0
+            ? new DMatrixRMaj(m, 0)
+            : CommonOps_DDRM.extract(linear.jacobian, 0, m, 0, parameters);
     DMatrixRMaj right1 = new DMatrixRMaj(m, 1);
     for (int row = 0; row < m; row++) {
       double sum = linear.residuals[row];

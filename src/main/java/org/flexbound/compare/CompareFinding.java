@@ -1,0 +1,70 @@
+package org.flexbound.compare;
+
+import org.flexbound.finding.FindingKind;
+import org.flexbound.finding.Severity;
+
+/** What can be found when measured and computed flexibility are brought together. */
+public enum CompareFinding implements FindingKind {
+  /** A scaled part that a configuration does not have. */
+  PART_NOT_IN_CONFIGURATION(
+      "COMPARE-PART-NOT-IN-CONFIGURATION",
+      Severity.NOTE,
+      "A part that a parameter scales is not there in one configuration.",
+      "Nothing, if the configuration is meant so."),
+  /** A parameter that no configuration has. */
+  PART_NOWHERE(
+      "COMPARE-PART-NOWHERE",
+      Severity.ERROR,
+      "A part that a parameter scales is in no configuration.",
+      "Correct the name, or the changes of the configurations."),
+  /** A coefficient without any scatter or floor. */
+  NO_SCATTER(
+      "COMPARE-NO-SCATTER",
+      Severity.ERROR,
+      "A coefficient has neither scatter nor a fixed floor, so that it would weigh infinitely.",
+      "State the repeatability in the options of the log."),
+  /** Nothing to compare. */
+  NOTHING_MEASURED(
+      "COMPARE-NOTHING-MEASURED",
+      Severity.ERROR,
+      "No coefficient of a configuration can be compared with the model.",
+      "Look at the verdicts of its runs and at the findings about base motion."),
+  /** A sign that disagrees, far outside of the uncertainty. */
+  OPPOSITE_SIGN(
+      "COMPARE-OPPOSITE-SIGN",
+      Severity.WARNING,
+      "A measured coefficient has the sign opposite to the computed one.",
+      "Look at the direction of the gauge and of the load.");
+
+  private final String code;
+  private final Severity severity;
+  private final String meaning;
+  private final String remedy;
+
+  CompareFinding(String code, Severity severity, String meaning, String remedy) {
+    this.code = code;
+    this.severity = severity;
+    this.meaning = meaning;
+    this.remedy = remedy;
+  }
+
+  @Override
+  public String code() {
+    return code;
+  }
+
+  @Override
+  public Severity severity() {
+    return severity;
+  }
+
+  @Override
+  public String meaning() {
+    return meaning;
+  }
+
+  @Override
+  public String remedy() {
+    return remedy;
+  }
+}
