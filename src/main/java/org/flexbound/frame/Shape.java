@@ -172,7 +172,7 @@ public enum Shape {
    * @param point the point
    * @return false where it lies farther out than the section's whole depth or width
    */
-  boolean mayHold(Map<String, Double> dimensions, SectionPoint point) {
+  public boolean mayHold(Map<String, Double> dimensions, SectionPoint point) {
     double depth = dimensions.getOrDefault("depth", size(dimensions, "diameter"));
     double width = dimensions.getOrDefault("width", size(dimensions, "diameter"));
     return Math.abs(point.z()) <= depth * 1.000001 && Math.abs(point.y()) <= width * 1.000001;
