@@ -61,6 +61,15 @@ public record FrameModel(
   }
 
   /**
+   * Where the model stands.
+   *
+   * @return the place of the whole model in the user's files
+   */
+  public Where where() {
+    return source.where();
+  }
+
+  /**
    * The place of a node.
    *
    * @param node a name of the table

@@ -131,7 +131,7 @@ public final class FrameFlexibility {
 
   /** Solves the nominal frame once, so that what is wrong with it is found before anything else. */
   private boolean check(Findings findings) {
-    Where where = model.source().where();
+    Where where = model.where();
     double[] stiffness = mesh.slots().set(List.of(), List.of());
     boolean[] told = new boolean[mesh.springs().size()];
     Structure structure =

@@ -39,7 +39,7 @@ final class Holding {
     this.model = model;
     this.mesh = mesh;
     this.findings = findings;
-    this.where = model.source().where();
+    this.where = model.where();
   }
 
   List<Map<Integer, Double>> rows(
