@@ -36,9 +36,12 @@ final class ParameterReader {
   private final JsonEntries entries;
   private final Findings findings;
 
-  ParameterReader(JsonEntries entries, Findings findings) {
+  private final boolean modelElsewhere;
+
+  ParameterReader(JsonEntries entries, Findings findings, boolean modelElsewhere) {
     this.entries = entries;
     this.findings = findings;
+    this.modelElsewhere = modelElsewhere;
   }
 
   Optional<Parameter> read(String name, Json value) {
@@ -106,6 +109,10 @@ final class ParameterReader {
 
   private List<String> scales(String name, Json.Members members) {
     Optional<Json> value = members.get("scales");
+    if (modelElsewhere) {
+      // The table has a column under the parameter's name; there is no model to look anything up in.
+      return List.of(name);
+    }
     if (value.isEmpty()) {
       findings.add(
           StudyFinding.MISSING_KEY,
@@ -155,6 +162,9 @@ final class ParameterReader {
       return Optional.empty();
     }
     String path = scales.get(0);
+    if (path.indexOf('.') < 0) {
+      return Optional.empty();
+    }
     String component = path.substring(path.lastIndexOf('.') + 1);
     if (path.startsWith("members.")) {
       return Optional.of(

@@ -181,7 +181,7 @@ public final class StudyReader {
       return List.of();
     }
     List<Parameter> result = new ArrayList<>();
-    ParameterReader reader = new ParameterReader(entries, findings);
+    ParameterReader reader = new ParameterReader(entries, findings, study.get("outsideFlexibility").isPresent());
     Optional<Json.Members> named = entries.members(value.get(), "parameters by name");
     if (named.isPresent()) {
       for (Map.Entry<String, Json> entry : named.get().members().entrySet()) {

@@ -1,0 +1,173 @@
+package org.flexbound.compare;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.OptionalDouble;
+import org.apache.commons.statistics.distribution.ChiSquaredDistribution;
+import org.apache.commons.statistics.distribution.FDistribution;
+import org.flexbound.finding.Findings;
+import org.flexbound.finding.Outcome;
+import org.flexbound.flexibility.AbsoluteCoefficient;
+import org.flexbound.flexibility.Coefficient;
+import org.flexbound.flexibility.MeasuredFlexibility;
+import org.flexbound.frame.FrameModel;
+import org.flexbound.solve.FlexibilitySolution;
+import org.flexbound.solve.PartContribution;
+import org.flexbound.study.Study;
+
+/** Compares measured with computed flexibility. */
+public final class FlexibilityComparator {
+  /** The contributions shown with a coefficient. */
+  private static final int PARTS_SHOWN = 8;
+
+  private static final double LEVEL = 0.95;
+
+  private FlexibilityComparator() {}
+
+  /**
+   * Compares the nominal model of a study.
+   *
+   * @param study the study
+   * @param model its frame model
+   * @param measured what was measured, by configuration
+   * @return the comparison, with all findings; no value where anything is in error
+   */
+  public static Outcome<Comparison> compare(
+      Study study, FrameModel model, List<MeasuredFlexibility> measured) {
+    return ConfiguredFrame.prepare(study, model, measured)
+        .then(frames -> Outcome.of(compare(frames), List.of()));
+  }
+
+  /**
+   * Compares the nominal frames.
+   *
+   * @param frames one for each configuration
+   * @return the comparison
+   */
+  public static Comparison compare(List<ConfiguredFrame> frames) {
+    Findings findings = new Findings();
+    List<ConfigurationComparison> result = new ArrayList<>();
+    for (ConfiguredFrame frame : frames) {
+      result.add(compare(frame, frame.nominal(), findings));
+    }
+    return new Comparison(result, findings.list());
+  }
+
+  private static ConfigurationComparison compare(
+      ConfiguredFrame frame, FlexibilitySolution solution, Findings findings) {
+    MeasuredFlexibility measured = frame.measured();
+    double[] absolute = frame.absolute(solution.values());
+    double[] computed = measured.map().apply(absolute);
+    double[] values = measured.values();
+    double[] differences = new double[values.length];
+    for (int r = 0; r < values.length; r++) {
+      differences[r] = values[r] - computed[r];
+    }
+    double[][] covariance = DifferenceCovariance.of(measured, absolute);
+    Map<String, double[]> parts = parts(measured, solution);
+    List<CoefficientComparison> coefficients = new ArrayList<>();
+    for (int r = 0; r < values.length; r++) {
+      Coefficient coefficient = measured.coefficients().get(r);
+      double u = Math.sqrt(covariance[r][r]);
+      String gauge = measured.gauges().get(coefficient.gauge()).name();
+      String load = measured.loads().get(coefficient.load()).name();
+      if (values[r] * computed[r] < 0 && Math.min(Math.abs(values[r]), Math.abs(computed[r])) > 3 * u) {
+        findings.add(
+            CompareFinding.OPPOSITE_SIGN,
+            measured.gauges().get(coefficient.gauge()).where(),
+            "gauge "
+                + gauge
+                + " moves the other way under load "
+                + load
+                + " in the model ("
+                + measured.configuration()
+                + ")");
+      }
+      coefficients.add(
+          new CoefficientComparison(
+              measured.configuration(),
+              gauge,
+              load,
+              values[r],
+              computed[r],
+              differences[r],
+              Math.abs(computed[r]) > u
+                  ? OptionalDouble.of(values[r] / computed[r])
+                  : OptionalDouble.empty(),
+              u,
+              differences[r] / u,
+              OptionalDouble.empty(),
+              largest(parts, r)));
+    }
+    WeightedSquares squares = new WeightedSquares(covariance);
+    return new ConfigurationComparison(
+        measured.configuration(),
+        coefficients,
+        squares.product(differences, differences),
+        limit(squares.rank(), measured.scatterDegreesOfFreedom()),
+        shares(parts, differences, squares));
+  }
+
+  /** Each part's contribution to every compared coefficient. */
+  private static Map<String, double[]> parts(
+      MeasuredFlexibility measured, FlexibilitySolution solution) {
+    Map<String, double[]> absolute = new LinkedHashMap<>();
+    int size = measured.absolute().size();
+    for (int i = 0; i < size; i++) {
+      AbsoluteCoefficient a = measured.absolute().get(i);
+      for (PartContribution part : solution.contributions(a.gauge(), a.load())) {
+        absolute.computeIfAbsent(part.part().toString(), unused -> new double[size])[i] +=
+            part.value();
+      }
+    }
+    Map<String, double[]> result = new LinkedHashMap<>();
+    absolute.forEach((part, values) -> result.put(part, measured.map().apply(values)));
+    return result;
+  }
+
+  private static List<CoefficientComparison.Contribution> largest(
+      Map<String, double[]> parts, int row) {
+    return parts.entrySet().stream()
+        .map(e -> new CoefficientComparison.Contribution(e.getKey(), e.getValue()[row]))
+        .filter(c -> c.value() != 0)
+        .sorted(
+            Comparator.comparingDouble(
+                    (CoefficientComparison.Contribution c) -> -Math.abs(c.value()))
+                .thenComparing(CoefficientComparison.Contribution::part))
+        .limit(PARTS_SHOWN)
+        .toList();
+  }
+
+  private static List<ConfigurationComparison.PartShare> shares(
+      Map<String, double[]> parts, double[] differences, WeightedSquares squares) {
+    List<ConfigurationComparison.PartShare> result = new ArrayList<>();
+    parts.forEach(
+        (part, values) -> {
+          double own = squares.product(values, values);
+          double shared = squares.product(values, differences);
+          if (own > 1e-6) {
+            result.add(
+                new ConfigurationComparison.PartShare(
+                    part, 1 + shared / own, shared * shared / own));
+          }
+        });
+    result.sort(
+        Comparator.comparingDouble(
+                (ConfigurationComparison.PartShare s) -> -s.misfitTakenAway())
+            .thenComparing(ConfigurationComparison.PartShare::part));
+    return result;
+  }
+
+  private static double limit(int degrees, double scatterDegrees) {
+    if (degrees == 0) {
+      return Double.POSITIVE_INFINITY;
+    }
+    return Double.isInfinite(scatterDegrees)
+        ? ChiSquaredDistribution.of(degrees).inverseCumulativeProbability(LEVEL)
+        : degrees
+            * FDistribution.of(degrees, scatterDegrees).inverseCumulativeProbability(LEVEL);
+  }
+}

@@ -1,0 +1,266 @@
+package org.flexbound.update;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.flexbound.compare.ConfiguredFrame;
+import org.flexbound.finding.Findings;
+import org.flexbound.finding.Outcome;
+import org.flexbound.flexibility.MeasuredFlexibility;
+import org.flexbound.flexibility.OutsideFlexibility;
+import org.flexbound.frame.FrameModel;
+import org.flexbound.frame.StiffnessPath;
+import org.flexbound.frame.StiffnessSetting;
+import org.flexbound.study.Configuration;
+import org.flexbound.study.FlexibilityChoice;
+import org.flexbound.study.HeldOutCase;
+import org.flexbound.study.Parameter;
+import org.flexbound.study.Study;
+import org.flexbound.study.StudyFinding;
+import org.flexbound.study.Working;
+
+/** Updates the frame model of a study. */
+public final class StudyUpdate {
+  private StudyUpdate() {}
+
+  /**
+   * Updates with all evidence.
+   *
+   * @param study the study
+   * @param model its frame model
+   * @param measured what was measured, by configuration
+   * @return the result (its findings among those of the outcome); no value where anything is in error
+   */
+  public static Outcome<UpdateResult> run(
+      Study study, FrameModel model, List<MeasuredFlexibility> measured) {
+    return run(study, model, measured, UpdateSettings.FULL);
+  }
+
+  /**
+   * Updates.
+   *
+   * @param study the study
+   * @param model its frame model
+   * @param measured what was measured, by configuration
+   * @param settings how much of the evidence is worked out
+   * @return the result (its findings among those of the outcome); no value where anything is in error
+   */
+  public static Outcome<UpdateResult> run(
+      Study study, FrameModel model, List<MeasuredFlexibility> measured, UpdateSettings settings) {
+    return problem(study, model, measured)
+        .then(
+            problem -> {
+              UpdateResult result = new UpdateSolver(settings).solve(problem);
+              return Outcome.of(result, result.findings());
+            });
+  }
+
+  /**
+   * Puts the problem together.
+   *
+   * @param study the study
+   * @param model its frame model
+   * @param measured what was measured, by configuration
+   * @return the problem; no value where anything is in error
+   */
+  public static Outcome<UpdateProblem> problem(
+      Study study, FrameModel model, List<MeasuredFlexibility> measured) {
+    Findings findings = new Findings();
+    List<WorkingParameter> parameters = new ParameterMaker(model, findings).of(study);
+    if (study.parameters().isEmpty()) {
+      findings.add(
+          StudyFinding.MISSING_KEY,
+          study.where(),
+          "the study has no 'parameters', so that nothing may change");
+    }
+    refuseUnsupported(study, findings);
+    refuseUnknownCases(study, measured, findings);
+    Outcome<List<ConfiguredFrame>> frames = ConfiguredFrame.prepare(study, model, measured);
+    findings.addAll(frames.findings());
+    if (frames.value().isEmpty() || findings.hasErrors()) {
+      return Outcome.none(findings.list());
+    }
+    List<ConfiguredFrame> ready = frames.value().get();
+    return Outcome.of(
+        new UpdateProblem(
+            parameters,
+            ready.stream().map(ConfiguredFrame::measured).toList(),
+            new FrameFunction(ready, parameters),
+            study.rule(),
+            study.heldOut(),
+            study.starts()),
+        findings.list());
+  }
+
+  /**
+   * Updates a model held elsewhere, by a table of its flexibility and sensitivities.
+   *
+   * @param study the study; every parameter is worked in its logarithm, with bounds as factors
+   * @param table the table, computed at the nominal parameters
+   * @param measured what was measured, by configuration
+   * @param settings how much of the evidence is worked out
+   * @return the result, parameters as factors; no value where anything is in error
+   */
+  public static Outcome<UpdateResult> runOutside(
+      Study study,
+      OutsideFlexibility table,
+      List<MeasuredFlexibility> measured,
+      UpdateSettings settings) {
+    Findings findings = new Findings();
+    List<WorkingParameter> parameters = new ArrayList<>();
+    for (Parameter parameter : study.parameters()) {
+      if (parameter.working() != Working.LN) {
+        findings.add(
+            StudyFinding.KEYS_DISAGREE,
+            parameter.where(),
+            "the parameter '"
+                + parameter.name()
+                + "' is of a model held elsewhere, which is worked in the logarithm only");
+      } else {
+        WorkingParameter.of(parameter, 1, "1", Double.NaN, findings).ifPresent(parameters::add);
+      }
+    }
+    refuseUnknownCases(study, measured, findings);
+    Optional<OutsideFunction> function =
+        OutsideFunction.of(table, measured, parameters, findings);
+    if (function.isEmpty() || findings.hasErrors()) {
+      return Outcome.none(findings.list());
+    }
+    findings.add(
+        UpdateFinding.LINEAR_STEP,
+        table.where(),
+        "the computed flexibility is that of a table, linear in each compliance about it");
+    UpdateResult result =
+        new UpdateSolver(settings)
+            .solve(
+                new UpdateProblem(
+                    parameters,
+                    measured,
+                    function.get(),
+                    study.rule(),
+                    study.heldOut(),
+                    study.starts()));
+    findings.addAll(result.findings());
+    return Outcome.of(result.with(findings.list()), findings.list());
+  }
+
+  /**
+   * Says before any test what status each parameter would get, if the nominal model were true.
+   *
+   * @param study the study
+   * @param model its frame model
+   * @param plans the planned tests, by configuration
+   * @return the forecast: statuses, standard deviations and intervals about the nominal model
+   */
+  public static Outcome<UpdateResult> beforeTest(
+      Study study, FrameModel model, List<PlannedTest> plans) {
+    Findings findings = new Findings();
+    List<MeasuredFlexibility> expected = new ArrayList<>();
+    for (PlannedTest plan : plans) {
+      Optional<Configuration> configuration =
+          study.configurations().stream()
+              .filter(c -> c.name().equals(plan.configuration()))
+              .findFirst();
+      if (configuration.isEmpty()) {
+        continue;
+      }
+      Outcome<double[][]> computed =
+          ConfiguredFrame.nominal(configuration.get(), model, plan.gauges(), plan.loads());
+      findings.addAll(computed.findings());
+      computed.value().flatMap(c -> plan.expected(c, findings)).ifPresent(expected::add);
+      if (plan.gauges().stream().anyMatch(org.flexbound.setup.Gauge::base)) {
+        findings.add(
+            UpdateFinding.PLANNED_WITHOUT_BASE_MOTION,
+            configuration.get().where(),
+            "the base gauges of '" + plan.configuration() + "' are taken to see no motion");
+      }
+    }
+    if (findings.hasErrors() || expected.isEmpty()) {
+      return Outcome.none(findings.list());
+    }
+    return Outcome.of(expected, findings.list())
+        .then(measured -> run(study, model, measured, UpdateSettings.ESTIMATES));
+  }
+
+  private static void refuseUnsupported(Study study, Findings findings) {
+    if (study.flexibility() instanceof FlexibilityChoice.Truncated) {
+      refuse(study, findings, "'flexibility' with a number of modes");
+    }
+    if (study.measuredModes().isPresent()) {
+      refuse(study, findings, "'measuredModes'");
+    }
+  }
+
+  private static void refuse(Study study, Findings findings, String what) {
+    findings.add(
+        StudyFinding.NOT_SUPPORTED_YET, study.where(), what + " is not supported yet in an update");
+  }
+
+  private static void refuseUnknownCases(
+      Study study, List<MeasuredFlexibility> measured, Findings findings) {
+    for (HeldOutCase heldOut : study.heldOut()) {
+      boolean known =
+          measured.stream()
+              .anyMatch(
+                  m ->
+                      m.loads().stream()
+                          .anyMatch(load -> heldOut.matches(m.configuration(), load.name())));
+      if (!known) {
+        findings.add(
+            StudyFinding.NO_SUCH_CASE,
+            heldOut.where(),
+            "found the held-out load '"
+                + heldOut.load()
+                + "'"
+                + heldOut.configuration().map(c -> " of the configuration '" + c + "'").orElse("")
+                + ", which no log of the study has");
+      }
+    }
+    boolean anythingLeft =
+        measured.isEmpty()
+            || measured.stream()
+                .anyMatch(
+                    m ->
+                        m.coefficients().stream()
+                            .anyMatch(
+                                c ->
+                                    study.heldOut().stream()
+                                        .noneMatch(
+                                            h ->
+                                                h.matches(
+                                                    m.configuration(),
+                                                    m.loads().get(c.load()).name()))));
+    if (!anythingLeft) {
+      findings.add(
+          StudyFinding.NO_SUCH_CASE,
+          study.where(),
+          "every load case is held out, so that none is left to fit");
+    }
+  }
+
+  /**
+   * The model with the stiffnesses of the point shown.
+   *
+   * @param model the study's frame model
+   * @param result the update
+   * @return the changed model; parameters that did not change are not touched
+   */
+  public static FrameModel updatedModel(FrameModel model, UpdateResult result) {
+    Map<StiffnessPath, StiffnessSetting> settings = new java.util.LinkedHashMap<>();
+    for (ParameterResult parameter : result.parameters()) {
+      if (parameter.workingValue() == parameter.priorMean()) {
+        continue;
+      }
+      StiffnessSetting setting =
+          parameter.working() == Working.LN
+              ? new StiffnessSetting.Factor(parameter.factor())
+              : new StiffnessSetting.Value(parameter.updated());
+      for (String scale : parameter.scales()) {
+        Optional<StiffnessPath> path = StiffnessPath.parse(scale);
+        path.filter(p -> model.stiffness(p).isPresent()).ifPresent(p -> settings.put(p, setting));
+      }
+    }
+    return model.with(settings);
+  }
+}
