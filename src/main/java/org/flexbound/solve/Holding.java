@@ -252,7 +252,7 @@ final class Holding {
   }
 
   /** Holds the first point of a structure without supports, and sees that its loads balance. */
-  private List<Map<Integer, Double>> free(List<Load> loads, List<Functional> columns) {
+  List<Map<Integer, Double>> free(List<Load> loads, List<Functional> columns) {
     double extent = PlaceFinder.extent(model);
     for (int l = 0; l < loads.size(); l++) {
       double unbalanced = columns.get(l).unbalanced(mesh, extent);

@@ -17,6 +17,7 @@ import org.flexbound.setup.Vector;
  * @param springNames of {@code springs}, for messages
  * @param ties pairs of points that move as one rigid body: leader, follower
  * @param spins the points between the ends of members whose ends may both turn about their axis
+ * @param bodies masses at points, for modes only
  * @param slots all stiffnesses
  */
 record Mesh(
@@ -29,6 +30,7 @@ record Mesh(
     List<String> springNames,
     List<Tie> ties,
     List<Spin> spins,
+    List<BodyElement> bodies,
     Slots slots) {
 
   /**

@@ -16,6 +16,7 @@ import org.flexbound.frame.Joint;
 import org.flexbound.frame.Material;
 import org.flexbound.frame.Member;
 import org.flexbound.frame.Node;
+import org.flexbound.frame.PointMass;
 import org.flexbound.frame.Rigidity;
 import org.flexbound.frame.RigidLink;
 import org.flexbound.frame.Section;
@@ -45,12 +46,13 @@ final class MeshBuilder {
   private final List<String> springNames = new ArrayList<>();
   private final List<Mesh.Tie> ties = new ArrayList<>();
   private final List<Mesh.Spin> spins = new ArrayList<>();
+  private final List<BodyElement> bodies = new ArrayList<>();
   private final Slots slots = new Slots();
   private final Map<String, int[]> jointSlots = new HashMap<>();
   private final Map<SectionKey, SectionProperties> sections = new HashMap<>();
   private final Map<PieceKey, UnitFlexibility> units = new HashMap<>();
   private final Map<String, TreeSet<Double>> divisions = new TreeMap<>();
-  private boolean separateJoints;
+  private boolean forModes;
 
   private record SectionKey(String section, double poissonRatio) {}
 
@@ -68,19 +70,19 @@ final class MeshBuilder {
         .ifPresent(m -> divisions.computeIfAbsent(m, name -> new TreeSet<>()).add(place.at()));
   }
 
-  /** Asks for joints as elements of their own, whose inner freedoms stay unknowns. */
-  void separateJoints() {
-    separateJoints = true;
-  }
-
-  /** Asks for pieces of equal length, at least so many for every member. */
-  void divideAll(int count) {
-    for (String member : model.members().keySet()) {
-      TreeSet<Double> at = divisions.computeIfAbsent(member, name -> new TreeSet<>());
-      for (int i = 1; i < count; i++) {
-        at.add((double) i / count);
-      }
-    }
+  /**
+   * Asks for what modes need: every member in so many pieces of equal length, joints as elements of
+   * their own, whose inner freedoms stay unknowns, and masses.
+   */
+  void forModes(Map<String, Integer> division) {
+    forModes = true;
+    division.forEach(
+        (member, count) -> {
+          TreeSet<Double> at = divisions.computeIfAbsent(member, name -> new TreeSet<>());
+          for (int i = 1; i < count; i++) {
+            at.add((double) i / count);
+          }
+        });
   }
 
   Mesh build() {
@@ -96,6 +98,11 @@ final class MeshBuilder {
     for (RigidLink link : model.rigidLinks()) {
       ties.add(new Mesh.Tie(at(link.from()), at(link.to())));
     }
+    if (forModes) {
+      for (PointMass mass : model.masses()) {
+        bodies.add(new BodyElement(at(mass.node()), mass));
+      }
+    }
     return new Mesh(
         Collections.unmodifiableList(places),
         Collections.unmodifiableList(labels),
@@ -106,6 +113,7 @@ final class MeshBuilder {
         Collections.unmodifiableList(springNames),
         Collections.unmodifiableList(ties),
         Collections.unmodifiableList(spins),
+        Collections.unmodifiableList(bodies),
         slots);
   }
 
@@ -164,9 +172,9 @@ final class MeshBuilder {
     double length = to.minus(from).norm();
     List<Double> cuts = cuts(member.name());
     boolean expandStart =
-        member.startJoint().isPresent() && (separateJoints || cuts.contains(0.0));
+        member.startJoint().isPresent() && (forModes || cuts.contains(0.0));
     boolean expandEnd =
-        member.endJoint().isPresent() && (separateJoints || cuts.contains(1.0));
+        member.endJoint().isPresent() && (forModes || cuts.contains(1.0));
     List<Double> bounds = new ArrayList<>(List.of(0.0));
     cuts.stream().filter(t -> t > 0 && t < 1).forEach(bounds::add);
     bounds.add(1.0);

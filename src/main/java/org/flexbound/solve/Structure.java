@@ -116,6 +116,7 @@ final class Structure {
         elements.add(rest);
       }
     }
+    elements.addAll(mesh.bodies());
     return new Structure(
         mesh, elements, gaps, constraints.transformation(gaps.size()), settings);
   }

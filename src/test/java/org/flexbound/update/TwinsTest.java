@@ -120,8 +120,10 @@ class TwinsTest {
   void intervalsCoverAsStatedOverAThousandTestsOfEachTwin() throws IOException {
     StringBuilder text =
         new StringBuilder(
-            "| structure | status | tests with it | intervals | hold the truth |\n"
-                + "| --- | --- | --- | --- | --- |\n");
+            """
+            | structure | status | tests with it | intervals | hold the truth |
+            | --- | --- | --- | --- | --- |
+            """);
     Coverage all = new Coverage();
     long seed = 1000;
     int tests = Integer.getInteger("twins", LONG);
