@@ -1,44 +1,95 @@
 package org.flexbound.document;
 
-import java.util.ArrayList;
-import java.util.List;
+import java.time.LocalDateTime;
+import java.util.Arrays;
+import java.util.BitSet;
+import org.apache.poi.ss.usermodel.DateUtil;
 import org.flexbound.finding.Where;
 
-/** A row that is filled anew for every visit. */
+/** A row of a workbook's sheet that is filled anew for every visit. */
 final class CellRow implements Row {
   private final String file;
   private final String sheet;
-  private final List<CellKind> kinds = new ArrayList<>();
-  private final List<String> texts = new ArrayList<>();
+  private final boolean from1904;
+  private CellKind[] kinds = new CellKind[32];
+  private String[] texts = new String[32];
   private double[] numbers = new double[32];
+  private final BitSet percent = new BitSet();
+  private int width;
   private int number;
+  private boolean hidden;
 
-  CellRow(String file, String sheet) {
+  /**
+   * An empty row.
+   *
+   * @param file the workbook's name in messages
+   * @param sheet the sheet's name
+   * @param from1904 whether days are counted from 1904
+   */
+  CellRow(String file, String sheet, boolean from1904) {
     this.file = file;
     this.sheet = sheet;
+    this.from1904 = from1904;
+    Arrays.fill(kinds, CellKind.BLANK);
+    Arrays.fill(texts, "");
   }
 
-  void begin(int rowNumber) {
+  void begin(int rowNumber, boolean isHidden) {
+    Arrays.fill(kinds, 0, width, CellKind.BLANK);
+    percent.clear();
+    width = 0;
     number = rowNumber;
-    kinds.clear();
-    texts.clear();
+    hidden = isHidden;
   }
 
-  void set(int column, CellKind kind, String text, double value) {
-    while (kinds.size() <= column) {
-      kinds.add(CellKind.BLANK);
-      texts.add("");
-    }
-    if (numbers.length < kinds.size()) {
-      numbers = java.util.Arrays.copyOf(numbers, 2 * kinds.size());
-    }
-    kinds.set(column, kind);
-    texts.set(column, text);
+  void number(int column, double value, boolean asPercent) {
+    put(column, CellKind.NUMBER);
     numbers[column] = value;
+    if (asPercent) {
+      percent.set(column);
+    }
+  }
+
+  void date(int column, double days) {
+    put(column, CellKind.DATE);
+    numbers[column] = days;
+  }
+
+  /** Text; blank where it holds nothing but blanks. */
+  void text(int column, String text) {
+    String stripped = text.strip();
+    if (!stripped.isEmpty()) {
+      put(column, CellKind.TEXT);
+      texts[column] = stripped;
+    }
+  }
+
+  void truth(int column, boolean value) {
+    put(column, CellKind.TRUTH);
+    texts[column] = value ? "TRUE" : "FALSE";
+  }
+
+  void error(int column, String text) {
+    put(column, CellKind.ERROR);
+    texts[column] = text;
+  }
+
+  private void put(int column, CellKind kind) {
+    if (column >= kinds.length) {
+      int old = kinds.length;
+      int size = Math.max(column + 1, 2 * old);
+      kinds = Arrays.copyOf(kinds, size);
+      texts = Arrays.copyOf(texts, size);
+      numbers = Arrays.copyOf(numbers, size);
+      Arrays.fill(kinds, old, size, CellKind.BLANK);
+      Arrays.fill(texts, old, size, "");
+    }
+    kinds[column] = kind;
+    width = Math.max(width, column + 1);
   }
 
   boolean isBlank() {
-    return kinds.stream().allMatch(kind -> kind == CellKind.BLANK);
+    return width == 0;
   }
 
   @Override
@@ -48,12 +99,17 @@ final class CellRow implements Row {
 
   @Override
   public int width() {
-    return kinds.size();
+    return width;
+  }
+
+  @Override
+  public boolean isHidden() {
+    return hidden;
   }
 
   @Override
   public CellKind kind(int column) {
-    return column < kinds.size() ? kinds.get(column) : CellKind.BLANK;
+    return column < width ? kinds[column] : CellKind.BLANK;
   }
 
   @Override
@@ -63,8 +119,18 @@ final class CellRow implements Row {
   }
 
   @Override
+  public boolean isPercent(int column) {
+    return percent.get(column);
+  }
+
+  @Override
   public String text(int column) {
-    return column < texts.size() ? texts.get(column) : "";
+    return switch (kind(column)) {
+      case BLANK -> "";
+      case NUMBER -> shortest(numbers[column]);
+      case DATE -> date(numbers[column]);
+      case TEXT, TRUTH, ERROR -> texts[column];
+    };
   }
 
   @Override
@@ -72,6 +138,19 @@ final class CellRow implements Row {
     return Where.cells(file, sheet, columnName(column) + number);
   }
 
+  private String date(double days) {
+    LocalDateTime date = DateUtil.getLocalDateTime(days, from1904);
+    return date == null ? shortest(days) : date.toString();
+  }
+
+  /** The shortest decimal text that reads back to the same number; whole numbers without a point. */
+  static String shortest(double value) {
+    return value == Math.rint(value) && Math.abs(value) < 1e15
+        ? String.valueOf((long) value)
+        : String.valueOf(value);
+  }
+
+  /** The letters of a column, from 0 for A. */
   static String columnName(int column) {
     StringBuilder name = new StringBuilder();
     for (int rest = column; rest >= 0; rest = rest / 26 - 1) {

@@ -1,6 +1,8 @@
 package org.flexbound.document;
 
 import java.io.IOException;
+import java.io.UncheckedIOException;
+import java.nio.ByteBuffer;
 import java.nio.charset.CharacterCodingException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
@@ -16,18 +18,35 @@ import tools.jackson.core.JacksonException;
 import tools.jackson.core.JsonParser;
 import tools.jackson.core.JsonToken;
 import tools.jackson.core.ObjectReadContext;
-import tools.jackson.core.StreamReadFeature;
+import tools.jackson.core.StreamReadConstraints;
+import tools.jackson.core.exc.StreamConstraintsException;
 import tools.jackson.core.json.JsonFactory;
 
-/** Reads a JSON file (RFC 8259, UTF-8) into values that know their line and JSON pointer. */
+/**
+ * Reads a JSON file (RFC 8259, UTF-8, with or without byte order mark) into values that know their
+ * line and JSON pointer. Keys that stand twice, numbers beyond the largest double, comments and text
+ * after the end are refused.
+ */
 public final class JsonFile {
-  private static final JsonFactory FACTORY =
-      JsonFactory.builder().enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION).build();
+  private static final String EXPECTED = "a JSON file (UTF-8)";
 
   private final String name;
+  private final Findings findings = new Findings();
 
   private JsonFile(String name) {
     this.name = name;
+  }
+
+  /**
+   * Reads a file within the usual limits.
+   *
+   * @param file where it lies
+   * @param shownName its name in messages
+   * @return the value, or the findings that say why there is none
+   * @throws UncheckedIOException where the system does not let it be read
+   */
+  public static Outcome<Json> read(Path file, String shownName) {
+    return read(file, shownName, ReadLimits.USUAL);
   }
 
   /**
@@ -35,63 +54,112 @@ public final class JsonFile {
    *
    * @param file where it lies
    * @param shownName its name in messages
+   * @param limits how much is read at most
    * @return the value, or the findings that say why there is none
+   * @throws UncheckedIOException where the system does not let it be read
    */
-  public static Outcome<Json> read(Path file, String shownName) {
+  public static Outcome<Json> read(Path file, String shownName, ReadLimits limits) {
     Findings findings = new Findings();
     Where whole = Where.file(shownName);
-    if (!Files.exists(file)) {
-      findings.add(DocumentFinding.MISSING, whole, "there is no such file");
+    InputFileCheck.Kind kind =
+        InputFileCheck.kind(file, shownName, EXPECTED, findings).orElse(null);
+    if (kind == null) {
       return Outcome.none(findings.list());
     }
-    if (!Files.isRegularFile(file)) {
-      findings.add(DocumentFinding.UNREADABLE, whole, "found a folder; expected a JSON file");
+    if (kind != InputFileCheck.Kind.TEXT) {
+      findings.add(
+          DocumentFinding.UNREADABLE, whole, "found " + kind.words() + "; expected " + EXPECTED);
       return Outcome.none(findings.list());
     }
-    String text;
     try {
-      text = Files.readString(file, StandardCharsets.UTF_8);
+      if (Files.size(file) > limits.jsonBytes()) {
+        findings.add(
+            DocumentFinding.LIMIT, whole, LimitedStream.message("json-bytes", limits.jsonBytes()));
+        return Outcome.none(findings.list());
+      }
+      byte[] bytes = Files.readAllBytes(file);
+      String text = StandardCharsets.UTF_8.newDecoder().decode(ByteBuffer.wrap(bytes)).toString();
+      return parse(text, shownName, limits);
     } catch (CharacterCodingException notUtf8) {
       findings.add(
-          DocumentFinding.UNREADABLE, whole, "found bytes that are not UTF-8; expected JSON");
+          DocumentFinding.UNREADABLE,
+          whole,
+          "found bytes that are not UTF-8; expected " + EXPECTED);
       return Outcome.none(findings.list());
     } catch (IOException refused) {
-      throw new java.io.UncheckedIOException(refused);
+      throw new UncheckedIOException(refused);
     }
-    return parse(text, shownName);
   }
 
   /**
-   * Reads a text.
+   * Reads a text within the usual limits.
    *
    * @param text the JSON text
    * @param shownName the file's name in messages
    * @return the value, or the findings that say why there is none
    */
   public static Outcome<Json> parse(String text, String shownName) {
-    Findings findings = new Findings();
+    return parse(text, shownName, ReadLimits.USUAL);
+  }
+
+  private static Outcome<Json> parse(String text, String shownName, ReadLimits limits) {
+    return new JsonFile(shownName).value(text, limits);
+  }
+
+  private Outcome<Json> value(String text, ReadLimits limits) {
     String body = text.startsWith("\uFEFF") ? text.substring(1) : text;
     if (body.isBlank()) {
       findings.add(
-          DocumentFinding.UNREADABLE, Where.file(shownName), "the file is empty; expected JSON");
+          DocumentFinding.UNREADABLE,
+          Where.file(name),
+          "the file holds nothing but blanks; expected " + EXPECTED);
       return Outcome.none(findings.list());
     }
-    try (JsonParser parser = FACTORY.createParser(ObjectReadContext.empty(), body)) {
+    try (JsonParser parser = factory(limits).createParser(ObjectReadContext.empty(), body)) {
       parser.nextToken();
-      Json value = new JsonFile(shownName).value(parser, "");
+      Json value = value(parser, "");
       if (parser.nextToken() != null) {
         findings.add(
             DocumentFinding.JSON_SYNTAX,
-            Where.line(shownName, parser.currentTokenLocation().getLineNr()),
+            Where.line(name, parser.currentTokenLocation().getLineNr()),
             "found more text after the end of the value; expected the end of the file");
       }
       return Outcome.of(value, findings.list());
+    } catch (StreamConstraintsException passed) {
+      findings.add(DocumentFinding.LIMIT, Where.line(name, line(passed)), limit(passed, limits));
     } catch (JacksonException broken) {
-      int line = broken.getLocation() == null ? 1 : Math.max(1, broken.getLocation().getLineNr());
+      int line = line(broken);
       findings.add(
-          DocumentFinding.JSON_SYNTAX, Where.line(shownName, line), broken.getOriginalMessage());
-      return Outcome.none(findings.list());
+          DocumentFinding.JSON_SYNTAX, Where.line(name, line), JsonSyntax.words(broken, body, line));
     }
+    return Outcome.none(findings.list());
+  }
+
+  private static JsonFactory factory(ReadLimits limits) {
+    return JsonFactory.builder()
+        .streamReadConstraints(
+            StreamReadConstraints.builder()
+                .maxNestingDepth(limits.jsonDepth())
+                .maxStringLength(limits.textLength())
+                .maxNameLength(50_000)
+                .maxNumberLength(1_000)
+                .build())
+        .build();
+  }
+
+  private static int line(JacksonException problem) {
+    return problem.getLocation() == null ? 1 : Math.max(1, problem.getLocation().getLineNr());
+  }
+
+  private static String limit(StreamConstraintsException passed, ReadLimits limits) {
+    String message = String.valueOf(passed.getOriginalMessage());
+    if (message.contains("nesting depth")) {
+      return LimitedStream.message("json-depth", limits.jsonDepth());
+    }
+    if (message.contains("String value length")) {
+      return LimitedStream.message("text-length", limits.textLength());
+    }
+    return "found a name or a number longer than any that makes sense";
   }
 
   private Json value(JsonParser parser, String pointer) {
@@ -101,12 +169,22 @@ public final class JsonFile {
       case START_OBJECT -> members(parser, pointer, where);
       case START_ARRAY -> items(parser, pointer, where);
       case VALUE_STRING -> new Json.Text(where, parser.getString());
-      case VALUE_NUMBER_INT, VALUE_NUMBER_FLOAT ->
-          new Json.Numeral(where, Double.parseDouble(parser.getString()));
+      case VALUE_NUMBER_INT, VALUE_NUMBER_FLOAT -> number(parser.getString(), where);
       case VALUE_TRUE -> new Json.Truth(where, true);
       case VALUE_FALSE -> new Json.Truth(where, false);
       default -> new Json.Nothing(where);
     };
+  }
+
+  private Json number(String text, Where where) {
+    double value = Double.parseDouble(text);
+    if (Double.isInfinite(value)) {
+      findings.add(
+          DocumentFinding.WRONG_KIND,
+          where,
+          "found " + text + "; expected a number that 64 bits hold (up to about 1.8e308)");
+    }
+    return new Json.Numeral(where, value);
   }
 
   private Json members(JsonParser parser, String pointer, Where where) {
@@ -114,7 +192,17 @@ public final class JsonFile {
     while (parser.nextToken() != JsonToken.END_OBJECT) {
       String key = parser.currentName();
       parser.nextToken();
-      members.put(key, value(parser, pointer + "/" + key.replace("~", "~0").replace("/", "~1")));
+      Json value = value(parser, pointer + "/" + key.replace("~", "~0").replace("/", "~1"));
+      Json before = members.putIfAbsent(key, value);
+      if (before != null) {
+        findings.add(
+            DocumentFinding.DUPLICATE_KEY,
+            value.where(),
+            "found the key '"
+                + key
+                + "' a second time; it stands already at line "
+                + before.where().line().orElse(1));
+      }
     }
     return new Json.Members(where, members);
   }

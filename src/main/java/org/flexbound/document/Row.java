@@ -54,4 +54,23 @@ public interface Row {
    * @return file, sheet and cell (CSV: file, line and column)
    */
   Where where(int column);
+
+  /**
+   * Whether a number is shown in percent: the cell shows 12 % where the number is 0.12.
+   *
+   * @param column the column, from 0
+   * @return true for a number in percent format
+   */
+  default boolean isPercent(int column) {
+    return false;
+  }
+
+  /**
+   * Whether the row is hidden in its workbook; it is read like the others.
+   *
+   * @return true for a hidden row
+   */
+  default boolean isHidden() {
+    return false;
+  }
 }

@@ -23,6 +23,17 @@ public interface Sheet {
    * from the beginning.
    *
    * @param visitor sees the rows
+   * @throws org.flexbound.finding.Refusal where the sheet turns out to be damaged, or passes a limit
+   * @throws java.io.UncheckedIOException where the system does not let it be read
    */
   void forEachRow(RowVisitor visitor);
+
+  /**
+   * What is hidden or merged. Known after a visit of all rows; before one, this reads the sheet.
+   *
+   * @return the notes
+   */
+  default SheetNotes notes() {
+    return SheetNotes.NONE;
+  }
 }

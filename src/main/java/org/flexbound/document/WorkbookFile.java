@@ -1,35 +1,33 @@
 package org.flexbound.document;
 
 import java.io.IOException;
-import java.io.UncheckedIOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.ArrayList;
-import java.util.List;
-import org.apache.poi.EmptyFileException;
-import org.apache.poi.EncryptedDocumentException;
-import org.apache.poi.ss.usermodel.Cell;
-import org.apache.poi.ss.usermodel.CellType;
-import org.apache.poi.ss.usermodel.DateUtil;
-import org.apache.poi.ss.usermodel.FormulaError;
-import org.apache.poi.ss.usermodel.Workbook;
-import org.apache.poi.ss.usermodel.WorkbookFactory;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Where;
 
-/** Opens a workbook (.xlsx or .xls); formulas count by their cached value. */
-public final class WorkbookFile implements SheetFile {
-  private final String name;
-  private final List<Sheet> sheets;
+/**
+ * Opens a workbook: .xlsx (and .xlsm) streamed, .xls in memory. Formulas count by the value stored
+ * with them; macros are never run and links to other files never followed.
+ *
+ * <p>No file stays open between visits of its sheets.
+ */
+public final class WorkbookFile {
+  private static final String EXPECTED = "a workbook (.xlsx)";
 
-  private WorkbookFile(String name, Workbook workbook) {
-    this.name = name;
-    List<Sheet> list = new ArrayList<>();
-    for (org.apache.poi.ss.usermodel.Sheet sheet : workbook) {
-      list.add(new PoiSheet(name, sheet));
-    }
-    this.sheets = List.copyOf(list);
+  private WorkbookFile() {}
+
+  /**
+   * Opens a workbook within the usual limits.
+   *
+   * @param file where it lies
+   * @param shownName its name in messages
+   * @return the sheets, or the findings that say why there are none
+   * @throws java.io.UncheckedIOException where the system does not let it be read
+   */
+  public static Outcome<SheetFile> open(Path file, String shownName) {
+    return open(file, shownName, ReadLimits.USUAL);
   }
 
   /**
@@ -37,122 +35,62 @@ public final class WorkbookFile implements SheetFile {
    *
    * @param file where it lies
    * @param shownName its name in messages
+   * @param limits how much is read at most
    * @return the sheets, or the findings that say why there are none
+   * @throws java.io.UncheckedIOException where the system does not let it be read
    */
-  public static Outcome<SheetFile> open(Path file, String shownName) {
+  public static Outcome<SheetFile> open(Path file, String shownName, ReadLimits limits) {
     Findings findings = new Findings();
-    Where whole = Where.file(shownName);
-    if (!Files.exists(file)) {
-      findings.add(DocumentFinding.MISSING, whole, "there is no such file");
-      return Outcome.none(findings.list());
-    }
-    if (!Files.isRegularFile(file)) {
-      findings.add(DocumentFinding.UNREADABLE, whole, "found a folder; expected a workbook");
-      return Outcome.none(findings.list());
-    }
-    try (Workbook workbook = WorkbookFactory.create(file.toFile(), null, true)) {
-      return Outcome.of(new WorkbookFile(shownName, workbook), findings.list());
-    } catch (EmptyFileException empty) {
-      findings.add(
-          DocumentFinding.UNREADABLE, whole, "the file is empty; expected a workbook (.xlsx)");
-    } catch (EncryptedDocumentException encrypted) {
-      findings.add(
-          DocumentFinding.UNREADABLE, whole, "the workbook is protected by a password");
-    } catch (IOException refused) {
-      if (!Files.isReadable(file)) {
-        throw new UncheckedIOException(refused);
-      }
-      findings.add(
-          DocumentFinding.UNREADABLE,
-          whole,
-          "this is not a workbook that can be read (" + refused.getMessage() + ")");
-    } catch (RuntimeException damaged) {
-      findings.add(
-          DocumentFinding.UNREADABLE, whole, "the workbook is damaged (" + damaged + ")");
-    }
+    return InputFileCheck.kind(file, shownName, EXPECTED, findings)
+        .map(
+            kind ->
+                switch (kind) {
+                  case ZIP -> StreamedWorkbook.open(file, shownName, limits, findings);
+                  case COMPOUND -> LegacyWorkbook.open(file, shownName, limits, findings);
+                  default -> wrongKind(kind, shownName, findings);
+                })
+        .map(
+            outcome -> {
+              if (outcome.value().isEmpty() || !openElsewhere(file)) {
+                return outcome;
+              }
+              Findings more = new Findings();
+              more.addAll(outcome.findings());
+              more.add(
+                  DocumentFinding.OPEN_ELSEWHERE,
+                  Where.file(shownName),
+                  "a lock file of a spreadsheet program lies beside the workbook");
+              return new Outcome<>(outcome.value(), more.list());
+            })
+        .orElseGet(() -> Outcome.none(findings.list()));
+  }
+
+  private static Outcome<SheetFile> wrongKind(
+      InputFileCheck.Kind kind, String shownName, Findings findings) {
+    findings.add(
+        DocumentFinding.UNREADABLE,
+        Where.file(shownName),
+        "found "
+            + kind.words()
+            + "; expected "
+            + EXPECTED
+            + (kind == InputFileCheck.Kind.TEXT
+                ? ". A text file does not become a workbook by its name: open it in a spreadsheet"
+                    + " program and save it as .xlsx"
+                : ""));
     return Outcome.none(findings.list());
   }
 
-  @Override
-  public String name() {
-    return name;
+  private static boolean openElsewhere(Path file) {
+    Path name = file.getFileName();
+    return name != null
+        && (Files.exists(file.resolveSibling("~$" + name))
+            || Files.exists(file.resolveSibling(".~lock." + name + "#")));
   }
 
-  @Override
-  public List<Sheet> sheets() {
-    return sheets;
-  }
-
-  @Override
-  public void close() {
-    // everything was read at opening
-  }
-
-  private record PoiSheet(String file, org.apache.poi.ss.usermodel.Sheet sheet) implements Sheet {
-    @Override
-    public String name() {
-      return sheet.getSheetName();
-    }
-
-    @Override
-    public Where where() {
-      return Where.sheet(file, sheet.getSheetName());
-    }
-
-    @Override
-    public void forEachRow(RowVisitor visitor) {
-      CellRow row = new CellRow(file, sheet.getSheetName());
-      for (org.apache.poi.ss.usermodel.Row source : sheet) {
-        row.begin(source.getRowNum() + 1);
-        for (Cell cell : source) {
-          fill(row, cell);
-        }
-        if (!row.isBlank() && !visitor.visit(row)) {
-          return;
-        }
-      }
-    }
-
-    private static void fill(CellRow row, Cell cell) {
-      int column = cell.getColumnIndex();
-      CellType type =
-          cell.getCellType() == CellType.FORMULA
-              ? cell.getCachedFormulaResultType()
-              : cell.getCellType();
-      switch (type) {
-        case NUMERIC -> {
-          double value = cell.getNumericCellValue();
-          if (DateUtil.isCellDateFormatted(cell)) {
-            row.set(column, CellKind.DATE, cell.getLocalDateTimeCellValue().toString(), value);
-          } else {
-            row.set(column, CellKind.NUMBER, number(value), value);
-          }
-        }
-        case STRING -> {
-          String text = cell.getStringCellValue().strip();
-          if (!text.isEmpty()) {
-            row.set(column, CellKind.TEXT, text, Double.NaN);
-          }
-        }
-        case BOOLEAN ->
-            row.set(
-                column, CellKind.TRUTH, cell.getBooleanCellValue() ? "TRUE" : "FALSE", Double.NaN);
-        case ERROR ->
-            row.set(
-                column,
-                CellKind.ERROR,
-                FormulaError.forInt(cell.getErrorCellValue()).getString(),
-                Double.NaN);
-        default -> {
-          // blank
-        }
-      }
-    }
-
-    private static String number(double value) {
-      return value == Math.rint(value) && Math.abs(value) < 1e15
-          ? String.valueOf((long) value)
-          : String.valueOf(value);
-    }
+  /** What an I/O problem says, in words: without the name of its class. */
+  static String words(IOException problem) {
+    String message = problem.getMessage();
+    return message == null || message.isBlank() ? "no more is known" : message;
   }
 }

@@ -132,6 +132,14 @@ public final class WorkbookLog {
             .table(SheetLayout.LIMITS)
             .map(table -> new LimitsReader(cells, findings).read(table))
             .orElse(List.of());
+    file.sheets().stream()
+        .filter(
+            sheet ->
+                isEntrySheet(sheet)
+                    || runs.stream()
+                        .anyMatch(run -> run.where().sheet().equals(Optional.of(sheet.name()))))
+        .filter(sheet -> !key(sheet.name()).equals("examples"))
+        .forEach(sheet -> sheet.notes().report(sheet.where(), findings));
     return Outcome.of(
         new TestLog(
             information, instruments, loads, gauges, runs, options, limits, List.of(input)),
