@@ -8,6 +8,8 @@ import java.util.List;
  * its own factor, as in N/mm/mm.
  */
 final class UnitExpression {
+  private static final int LARGEST_POWER = 12;
+
   private final String text;
   private int at;
 
@@ -78,7 +80,7 @@ final class UnitExpression {
     while (at < text.length()) {
       char c = text.charAt(at);
       int superscript = "⁰¹²³⁴⁵⁶⁷⁸⁹".indexOf(c);
-      if (Character.isDigit(c)) {
+      if (c >= '0' && c <= '9') {
         digits.append(c);
       } else if (superscript >= 0) {
         digits.append(superscript);
@@ -92,11 +94,15 @@ final class UnitExpression {
     if (digits.length() == 0) {
       return 1;
     }
-    try {
-      return Integer.parseInt(digits.toString());
-    } catch (NumberFormatException notAPower) {
-      throw new UnitException("'" + text + "' is not a unit: a power cannot be read (" + notAPower + ")");
+    int power = LARGEST_POWER + 1;
+    if (digits.length() <= 3 && !digits.toString().equals("-")) {
+      power = Integer.parseInt(digits.toString());
     }
+    if (Math.abs(power) > LARGEST_POWER) {
+      throw new UnitException(
+          "'" + text + "' is not a unit: a power is a whole number of at most " + LARGEST_POWER);
+    }
+    return power;
   }
 
   private javax.measure.Unit<?> look(String piece) throws UnitException {

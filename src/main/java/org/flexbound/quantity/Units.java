@@ -10,6 +10,9 @@ import tech.units.indriya.AbstractUnit;
 
 /** Reads units as people spell them: products, quotients and powers of the table's spellings. */
 public final class Units {
+  /** Longer than any unit somebody writes; keeps nested parentheses from exhausting the stack. */
+  private static final int LONGEST = 100;
+
   private Units() {}
 
   /**
@@ -24,6 +27,10 @@ public final class Units {
     String trimmed = text.strip();
     if (trimmed.isEmpty()) {
       return Unit.ONE;
+    }
+    if (trimmed.length() > LONGEST) {
+      throw new UnitException(
+          "'" + shown(trimmed) + "' is not a unit: it is longer than " + LONGEST + " characters");
     }
     Unit degrees = TemperatureUnits.find(trimmed);
     if (degrees != null) {
@@ -66,6 +73,11 @@ public final class Units {
     } catch (IncommensurableException impossible) {
       throw new UnitException("'" + symbol + "' has no conversion to SI units");
     }
+  }
+
+  /** A text as it is shown in a message: cut where it is very long. */
+  static String shown(String text) {
+    return text.length() > 60 ? text.substring(0, 57) + "…" : text;
   }
 
   /** The product of two units of any kind. */

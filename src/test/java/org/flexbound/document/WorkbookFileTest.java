@@ -344,7 +344,7 @@ class WorkbookFileTest {
   void numbersAreReadToTheLastBit() throws IOException {
     XSSFWorkbook workbook = new XSSFWorkbook();
     org.apache.poi.ss.usermodel.Row row = workbook.createSheet("s").createRow(0);
-    double[] values = {0.1, 1.0 / 3, 1e308, 4.9e-324, -0.0, 123456789.123456789, 1e22, 1e23};
+    double[] values = {0.1, 1.0 / 3, 1e308, 4.9e-324, -0.0, 123456789.12345679, 1e22, 1.2345e23};
     for (int i = 0; i < values.length; i++) {
       row.createCell(i).setCellValue(values[i]);
     }
