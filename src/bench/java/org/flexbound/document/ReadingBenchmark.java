@@ -124,7 +124,7 @@ public final class ReadingBenchmark {
     try (BufferedReader reader = Files.newBufferedReader(file)) {
       reader.readLine();
       for (String line = reader.readLine(); line != null; line = reader.readLine()) {
-        for (String field : line.split(",")) {
+        for (String field : line.split(",", -1)) {
           sum += Double.parseDouble(field);
         }
       }

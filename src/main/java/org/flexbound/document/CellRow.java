@@ -8,6 +8,9 @@ import org.flexbound.finding.Where;
 
 /** A row of a workbook's sheet that is filled anew for every visit. */
 final class CellRow implements Row {
+  /** 31 December 9999, the last day a workbook can show. */
+  private static final double LAST_DAY = 2_958_465;
+
   private final String file;
   private final String sheet;
   private final boolean from1904;
@@ -139,6 +142,9 @@ final class CellRow implements Row {
   }
 
   private String date(double days) {
+    if (days > LAST_DAY) {
+      return shortest(days);
+    }
     LocalDateTime date = DateUtil.getLocalDateTime(days, from1904);
     return date == null ? shortest(days) : date.toString();
   }

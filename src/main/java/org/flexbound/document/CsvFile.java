@@ -127,9 +127,10 @@ public final class CsvFile implements SheetFile {
       try (InputStream in = stream()) {
         new CsvScanner(in, dialect, limits, new CsvRow(name, dialect)).forEachRow(visitor);
       } catch (LimitedStream.Passed passed) {
-        throw refusal(DocumentFinding.LIMIT, WorkbookFile.words(passed));
-      } catch (CsvScanner.OpenQuote open) {
-        throw refusal(DocumentFinding.UNREADABLE, WorkbookFile.words(open));
+        throw refusal(DocumentFinding.LIMIT, where(), WorkbookFile.words(passed));
+      } catch (CsvScanner.BadQuotes bad) {
+        throw refusal(
+            DocumentFinding.UNREADABLE, Where.line(name, bad.line()), WorkbookFile.words(bad));
       } catch (IOException refused) {
         throw new UncheckedIOException(refused);
       }
@@ -147,8 +148,8 @@ public final class CsvFile implements SheetFile {
               .get();
     }
 
-    private Refusal refusal(DocumentFinding kind, String message) {
-      return new Refusal(List.of(new Finding(kind, where(), message)));
+    private Refusal refusal(DocumentFinding kind, Where where, String message) {
+      return new Refusal(List.of(new Finding(kind, where, message)));
     }
   }
 }

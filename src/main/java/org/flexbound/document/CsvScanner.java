@@ -1,5 +1,6 @@
 package org.flexbound.document;
 
+import de.siegmar.fastcsv.reader.CsvParseException;
 import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.CsvRecord;
 import java.io.IOException;
@@ -37,12 +38,20 @@ final class CsvScanner {
     this.lineEnd = (byte) dialect.lineEnd();
   }
 
-  /** A quote is opened and never closed. */
-  static final class OpenQuote extends IOException {
+  /** The quotes of a record do not fit together. */
+  static final class BadQuotes extends IOException {
     private static final long serialVersionUID = 1L;
 
-    OpenQuote(int line) {
-      super("a quote that begins in line " + line + " is never closed");
+    private final int line;
+
+    BadQuotes(String message, int line) {
+      super(message);
+      this.line = line;
+    }
+
+    /** The line at which the record begins. */
+    int line() {
+      return line;
     }
   }
 
@@ -139,7 +148,8 @@ final class CsvScanner {
       return NOT_ENDED;
     }
     if (inside) {
-      throw new OpenQuote(line);
+      throw new BadQuotes(
+          "a quote that begins in this line is never closed; expected a second one", line);
     }
     split(end);
     return end;
@@ -153,6 +163,10 @@ final class CsvScanner {
         row.texts(record.getFields().toArray(new String[0]));
         return;
       }
+    } catch (CsvParseException mixed) {
+      throw new BadQuotes(
+          "found text right after a closing quote; expected the separator or the end of the line",
+          line);
     }
     row.texts(new String[0]);
   }

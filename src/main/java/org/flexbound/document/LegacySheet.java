@@ -7,6 +7,8 @@ import org.apache.poi.ss.usermodel.CellType;
 import org.apache.poi.ss.usermodel.DateUtil;
 import org.apache.poi.ss.usermodel.FormulaError;
 import org.apache.poi.ss.util.CellRangeAddress;
+import org.flexbound.finding.Finding;
+import org.flexbound.finding.Refusal;
 import org.flexbound.finding.Where;
 
 /** A sheet of an .xls workbook. */
@@ -33,6 +35,15 @@ final class LegacySheet implements Sheet {
 
   @Override
   public SheetNotes notes() {
+    try {
+      return known();
+    } catch (RuntimeException damaged) {
+      // the layout is damaged though the values are not: there is nothing to note
+      return new SheetNotes(hidden, 0, 0, List.of(), List.of());
+    }
+  }
+
+  private SheetNotes known() {
     int hiddenRows = 0;
     int first = 0;
     int width = 0;
@@ -57,9 +68,18 @@ final class LegacySheet implements Sheet {
   public void forEachRow(RowVisitor visitor) {
     CellRow row = new CellRow(file, sheet.getSheetName(), false);
     for (org.apache.poi.ss.usermodel.Row source : sheet) {
-      row.begin(source.getRowNum() + 1, source.getZeroHeight());
-      for (Cell cell : source) {
-        fill(row, cell);
+      try {
+        row.begin(source.getRowNum() + 1, source.getZeroHeight());
+        for (Cell cell : source) {
+          fill(row, cell);
+        }
+      } catch (RuntimeException damaged) {
+        throw new Refusal(
+            List.of(
+                new Finding(
+                    DocumentFinding.UNREADABLE,
+                    where(),
+                    "the sheet is damaged at row " + (source.getRowNum() + 1))));
       }
       if (!row.isBlank() && !visitor.visit(row)) {
         return;
@@ -76,7 +96,9 @@ final class LegacySheet implements Sheet {
     switch (type) {
       case NUMERIC -> {
         double value = cell.getNumericCellValue();
-        if (DateUtil.isCellDateFormatted(cell)) {
+        if (!Double.isFinite(value)) {
+          row.error(column, "(no number)");
+        } else if (DateUtil.isCellDateFormatted(cell)) {
           row.date(column, value);
         } else {
           row.number(column, value, cell.getCellStyle().getDataFormatString().indexOf('%') >= 0);

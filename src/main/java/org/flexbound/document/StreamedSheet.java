@@ -90,7 +90,10 @@ final class StreamedSheet implements Sheet {
       throw refusal(DocumentFinding.UNREADABLE, "the sheet is damaged: " + damaged.getMessage());
     } catch (LimitedStream.Passed passed) {
       throw refusal(DocumentFinding.LIMIT, WorkbookFile.words(passed));
-    } catch (ZipException | java.io.EOFException | java.io.UTFDataFormatException damaged) {
+    } catch (ZipException
+        | java.io.EOFException
+        | java.io.UnsupportedEncodingException
+        | java.io.UTFDataFormatException damaged) {
       throw refusal(
           DocumentFinding.UNREADABLE,
           "the sheet is damaged or cut short (" + WorkbookFile.words(damaged) + ")");

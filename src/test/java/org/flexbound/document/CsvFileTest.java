@@ -128,7 +128,12 @@ class CsvFileTest {
     Sheet sheet = open("a;b\n1;2\n\"oops;3\n4;5\n");
     assertThatThrownBy(() -> sheet.forEachRow(row -> true))
         .isInstanceOf(Refusal.class)
-        .hasMessageContaining("a quote that begins in line 3 is never closed");
+        .hasMessageContaining(
+            "logs/Protokoll 7.csv, line 3: a quote that begins in this line is never closed");
+    Sheet mixed = open("a;b\n\"1\"2;3\n");
+    assertThatThrownBy(() -> mixed.forEachRow(row -> true))
+        .isInstanceOf(Refusal.class)
+        .hasMessageContaining("line 2: found text right after a closing quote");
   }
 
   @Test
