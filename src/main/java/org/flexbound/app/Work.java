@@ -1,11 +1,18 @@
 package org.flexbound.app;
 
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
+import org.flexbound.compare.Comparison;
+import org.flexbound.compare.FlexibilityComparator;
 import org.flexbound.document.OutputFolder;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Refusal;
+import org.flexbound.flexibility.MeasuredFlexibility;
+import org.flexbound.frame.FrameModel;
+import org.flexbound.frame.FrameWriter;
 import org.flexbound.reduce.Places;
 import org.flexbound.reduce.Reducer;
 import org.flexbound.reduce.Reduction;
@@ -16,6 +23,8 @@ import org.flexbound.report.results.Results;
 import org.flexbound.study.Study;
 import org.flexbound.testlog.TestLog;
 import org.flexbound.testlog.WorkbookLog;
+import org.flexbound.update.StudyUpdate;
+import org.flexbound.update.UpdateResult;
 
 /** The steps of the commands that read a test. */
 final class Work {
@@ -43,29 +52,75 @@ final class Work {
     gathering.configuration(
         log, name, reduced.value().orElseThrow(() -> new Refusal(findings.list())), List.of());
     gathering.findings(findings.list());
-    return finish(gathering.results(), new OutputFolder(output.folder));
+    return finish(gathering.results(), new OutputFolder(output.folder), false);
   }
 
-  ExitCode compare(Path study) {
-    return refuse(study);
+  ExitCode compare(Path file) {
+    StudyFiles files = StudyFiles.read(file);
+    Prepared prepared = prepare("compare", files);
+    return finish(prepared.gathering().results(), new OutputFolder(output.folder), false);
   }
 
-  ExitCode update(Path study) {
-    return refuse(study);
+  ExitCode update(Path file) {
+    StudyFiles files = StudyFiles.read(file);
+    Prepared prepared = prepare("update", files);
+    Outcome<UpdateResult> updated =
+        StudyUpdate.run(files.study(), files.model(), prepared.measured());
+    prepared.gathering().findings(updated.findings());
+    if (updated.hasErrors() || updated.value().isEmpty()) {
+      throw new Refusal(updated.findings());
+    }
+    UpdateResult result = updated.value().get();
+    prepared.gathering().update(result);
+    OutputFolder folder = new OutputFolder(output.folder);
+    FrameModel model = StudyUpdate.updatedModel(files.model(), result);
+    folder.add("updated-model.json", FrameWriter.write(model).getBytes(StandardCharsets.UTF_8));
+    return finish(prepared.gathering().results(), folder, result.undecided());
   }
 
-  private ExitCode refuse(Path file) {
-    terminal.err().println("flexbound: reading " + file + " is not supported yet");
-    return ExitCode.COMMAND_LINE;
+  /** What both commands on a study come to before they part. */
+  private record Prepared(Gathering gathering, List<MeasuredFlexibility> measured) {}
+
+  private static Prepared prepare(String command, StudyFiles files) {
+    Findings findings = new Findings();
+    findings.addAll(files.findings());
+    Gathering gathering = new Gathering(command);
+    gathering.title(files.study().title());
+    files.inputs().forEach(gathering::input);
+    files.study().model().ifPresent(name -> gathering.model(files.model(), name));
+    List<MeasuredFlexibility> measured = new ArrayList<>();
+    for (StudyFiles.Tested tested : files.tested()) {
+      Outcome<Reduction> reduced =
+          Reducer.reduce(
+              new ReductionProblem(
+                  tested.configuration(), tested.log(), new ModelPlaces(tested.model())));
+      findings.addAll(reduced.findings());
+      reduced
+          .value()
+          .ifPresent(
+              reduction -> {
+                measured.add(reduction.flexibility());
+                gathering.configuration(
+                    tested.log(), tested.file(), reduction, tested.changes());
+              });
+    }
+    findings.refuseIfErrors();
+    Outcome<Comparison> compared =
+        FlexibilityComparator.compare(files.study(), files.model(), measured);
+    findings.addAll(compared.findings());
+    findings.refuseIfErrors();
+    compared.value().ifPresent(gathering::comparison);
+    gathering.findings(findings.list());
+    return new Prepared(gathering, measured);
   }
 
   /** Writes, prints, and says how the command ended. */
-  private ExitCode finish(Results results, OutputFolder folder) {
+  private ExitCode finish(Results results, OutputFolder folder, boolean undecided) {
     ReportFiles.add(folder, results, output.units);
     List<Path> written = folder.write();
     Summary summary = new Summary(terminal, results, output.units);
     summary.print();
     summary.written(written);
-    return ExitCode.DONE;
+    return undecided ? ExitCode.UNDECIDED : ExitCode.DONE;
   }
 }

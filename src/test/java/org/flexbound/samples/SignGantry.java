@@ -28,7 +28,12 @@ final class SignGantry {
   static final List<String> CHAIN = List.of("post", "inner arm", "outer arm");
   static final String LOG = "load-test-log.xlsx";
 
-  private static final long SEED = 20_260_203L;
+  /**
+   * An ordinary draw. Of the ten seeds about it, two put one identified parameter further than two
+   * posterior standard deviations from the truth, about as many as chance would.
+   */
+  private static final long SEED = 20_260_206L;
+
   private static final double SCATTER = 0.004;
   private static final double DRIFT_PER_STEP = 1.5e-6;
 
@@ -67,9 +72,11 @@ final class SignGantry {
           new Pull("pull arm side", "outer arm", 1, "tip", "+y", 3000, 4.6),
           new Pull("pull knee side", "post", 1, "knee", "+y", 5000, 0));
 
-  private final Random random = new Random(SEED);
+  private final Random random;
 
-  private SignGantry() {}
+  private SignGantry(long seed) {
+    random = new Random(seed);
+  }
 
   /**
    * Writes the log.
@@ -77,7 +84,11 @@ final class SignGantry {
    * @param file where to
    */
   static void write(Path file) {
-    new SignGantry().log().write(file);
+    write(file, SEED);
+  }
+
+  static void write(Path file, long seed) {
+    new SignGantry(seed).log().write(file);
   }
 
   /** Writes the log where the sample keeps it. */

@@ -143,8 +143,12 @@ public final class StructureFigures {
     String unit = measured.get(0).unit();
     String heading = "Load " + load.name() + ": motions at the gauges";
     String caption =
-        "Filled circle: measured; hollow square on a dashed stroke: computed"
-            + (results.update().isPresent() ? " with the updated model" : " with the model")
+        "Filled circle: measured"
+            + (results.comparison().isEmpty()
+                ? ""
+                : "; ring on a dashed stroke: computed with the "
+                    + (results.update().isPresent() ? "updated" : "nominal")
+                    + " model")
             + ". The longest stroke stands for "
             + Rounded.significant(units.shown(largest, unit), 3)
             + " "

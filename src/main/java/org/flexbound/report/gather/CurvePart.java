@@ -51,6 +51,7 @@ final class CurvePart {
     double fallback = slope.intercepts().values().stream().findFirst().orElse(0.0);
     double sign = 1;
     double largest = 0;
+    double tare = tare(slope);
     for (LoadStep step : slope.steps()) {
       if (!Double.isFinite(step.motion()) || !Double.isFinite(step.load())) {
         continue;
@@ -60,7 +61,7 @@ final class CurvePart {
       points.add(
           new CurvePoint(
               step.load(),
-              step.motion(),
+              step.motion() - tare,
               step.rising() ? "loading" : "unloading",
               step.cycle(),
               step.fate() == LoadStep.Fate.FITTED,
@@ -77,7 +78,8 @@ final class CurvePart {
           Double intercept = slope.intercepts().get(branch);
           if (intercept != null) {
             lines.add(
-                new Line(step.rising() ? "loading" : "unloading", step.cycle(), intercept));
+                new Line(
+                    step.rising() ? "loading" : "unloading", step.cycle(), intercept - tare));
           }
         });
     return new Curve(
@@ -95,6 +97,24 @@ final class CurvePart {
         points);
   }
 
+  /** The reading at the first of the steps with the least load: the opening zero, where there is one. */
+  private static double tare(RunSlope slope) {
+    double least = Double.POSITIVE_INFINITY;
+    double largest = 0;
+    for (LoadStep step : slope.steps()) {
+      if (Double.isFinite(step.motion())) {
+        least = Math.min(least, Math.abs(step.load()));
+        largest = Math.max(largest, Math.abs(step.load()));
+      }
+    }
+    for (LoadStep step : slope.steps()) {
+      if (Double.isFinite(step.motion()) && Math.abs(step.load()) <= least + 0.01 * largest) {
+        return step.motion();
+      }
+    }
+    return 0;
+  }
+
   /** Half the load times the motion along it, where a gauge reads it. */
   List<Energy> energy() {
     List<Energy> result = new ArrayList<>();
@@ -106,8 +126,9 @@ final class CurvePart {
         if (slope.load().equals(load.name())
             && along.isPresent()
             && slope.gauge().equals(along.get().name())) {
+          double tare = tare(slope);
           for (LoadStep step : slope.steps()) {
-            double energy = 0.5 * Math.abs(step.load() * step.motion());
+            double energy = 0.5 * Math.abs(step.load() * (step.motion() - tare));
             if (energy > most) {
               most = energy;
               run = slope.run();
