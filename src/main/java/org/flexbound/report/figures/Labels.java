@@ -2,7 +2,7 @@ package org.flexbound.report.figures;
 
 /** Names as they fit into a figure. */
 final class Labels {
-  private static final int LONGEST = 34;
+  private static final int LONGEST = 48;
 
   private Labels() {}
 

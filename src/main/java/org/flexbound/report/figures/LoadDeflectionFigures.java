@@ -185,8 +185,7 @@ public final class LoadDeflectionFigures {
         + String.join("; ", slopes)
         + " "
         + units.symbol(slopeUnit)
-        + ". Filled: loading; hollow: unloading; crossed: left out. The range of the fit is shaded;"
-        + " the strip below shows what the fitted line leaves.";
+        + ".";
   }
 
   private String words(Curve curve, CurvePoint point) {

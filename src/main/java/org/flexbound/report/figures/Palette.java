@@ -4,6 +4,7 @@ import java.awt.BasicStroke;
 import java.awt.Color;
 import java.awt.Font;
 import java.awt.FontFormatException;
+import java.awt.GraphicsEnvironment;
 import java.awt.Shape;
 import java.awt.Stroke;
 import java.awt.geom.Ellipse2D;
@@ -47,9 +48,13 @@ final class Palette {
   private static Font load() {
     String path = "/net/sf/jasperreports/fonts/dejavu/DejaVuSansCondensed.ttf";
     try (InputStream stream = Palette.class.getResourceAsStream(path)) {
-      return stream == null
-          ? new Font(Font.SANS_SERIF, Font.PLAIN, 11)
-          : Font.createFont(Font.TRUETYPE_FONT, stream);
+      if (stream == null) {
+        return new Font(Font.SANS_SERIF, Font.PLAIN, 11);
+      }
+      Font font = Font.createFont(Font.TRUETYPE_FONT, stream);
+      // Known by its name as well, for the PDF library draws the figures' texts by name.
+      GraphicsEnvironment.getLocalGraphicsEnvironment().registerFont(font);
+      return font;
     } catch (IOException | FontFormatException unreadable) {
       throw new UncheckedIOException(new IOException("the font of the figures", unreadable));
     }

@@ -34,6 +34,9 @@ import org.flexbound.testlog.TestLog;
 final class ReductionPart {
   private static final double JOINT_LIMIT = 0.05;
 
+  /** A motion smaller than this many uncertainties has no span that figures could be shares of. */
+  private static final double SEEN = 3;
+
   private final Reduction reduction;
   private final MeasuredFlexibility flexibility;
   private final TestLog log;
@@ -155,7 +158,9 @@ final class ReductionPart {
               Math.sqrt(gain),
               same ? OptionalDouble.empty() : absolute,
               runs,
-              quality(gauge.name(), load.name())));
+              Math.abs(c.value()) > SEEN * c.standardUncertainty()
+                  ? quality(gauge.name(), load.name())
+                  : List.of()));
     }
     return result;
   }

@@ -1,7 +1,9 @@
 package org.flexbound.report.page;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import org.flexbound.report.results.Configuration;
 import org.flexbound.report.results.Exclusion;
 import org.flexbound.report.results.Input;
@@ -150,8 +152,25 @@ final class MethodSection {
         new TableMaker("What was left out, and by whom")
             .text("Run", "What", "Cells", "Reason", "Decided by")
             .number("Readings");
+    // One row for the same decision on several gauges of a run; results.json has each of them.
+    Map<String, List<Exclusion>> decisions = new LinkedHashMap<>();
     for (Exclusion e : results.excluded()) {
-      table.row(e.run(), e.what(), e.where(), e.reason(), e.by(), String.valueOf(e.readings()));
+      decisions
+          .computeIfAbsent(
+              e.configuration() + "\u0000" + e.run() + "\u0000" + e.reason() + "\u0000" + e.by(),
+              unused -> new ArrayList<>())
+          .add(e);
+    }
+    for (List<Exclusion> same : decisions.values()) {
+      Exclusion first = same.get(0);
+      int readings = same.stream().mapToInt(Exclusion::readings).sum();
+      table.row(
+          first.run(),
+          first.what() + (same.size() > 1 ? " and " + (same.size() - 1) + " more like it" : ""),
+          first.where(),
+          first.reason(),
+          first.by(),
+          String.valueOf(readings));
     }
     return table;
   }

@@ -101,12 +101,21 @@ public final class ReportMaker {
         new ArrayList<>(new FlexibilityPicture(units).draw(results.coefficients()));
     matrix.addAll(ReciprocityFigure.draw(results.reciprocity()));
     add(sections, "matrix-section", "Flexibility and reciprocity", matrix, false);
-    add(
-        sections,
-        "curves-section",
-        "Load and deflection",
-        new LoadDeflectionFigures(units).draw(results.curves()),
-        true);
+    List<Figure> curves = new LoadDeflectionFigures(units).draw(results.curves());
+    if (!curves.isEmpty()) {
+      sections.add(
+          new Section(
+              "curves-section",
+              "Load and deflection",
+              List.of(
+                  new Block.Text(
+                      "Each mark is a load step: filled while loading, hollow while unloading,"
+                          + " crossed where it was left out of the fit. The range of the fit is"
+                          + " shaded. The strip below each plot shows what the fitted lines leave:"
+                          + " it should look like noise. Motions are counted from the opening"
+                          + " zero."),
+                  new Block.Figures(curves, true))));
+    }
     return sections;
   }
 
