@@ -242,4 +242,29 @@ class EndToEndTest {
     assertThat(record.coefficients().get(0).value())
         .isCloseTo(0.7222e-9, org.assertj.core.api.Assertions.within(0.002e-9));
   }
+
+  @Test
+  void theTemplatesExampleRunsAsItStandsAndTheBlankLogSaysWhatToFillIn() {
+    Path templates = folder.resolve("my-test");
+    assertThat(run("template", templates.toString())).isZero();
+    assertThat(templates.resolve("load-test-log.xlsx")).isNotEmptyFile();
+    int code =
+        run(
+            "update",
+            templates.resolve("study.json").toString(),
+            "--out",
+            folder.resolve("out").toString());
+    assertThat(code).as(out + "\n" + err).isZero();
+    int blank = run("reduce", templates.resolve("load-test-log.xlsx").toString());
+    assertThat(blank).isEqualTo(3);
+    assertThat(err.toString()).contains("load-test-log.xlsx").contains("Gauges");
+  }
+
+  @Test
+  void templatesThatAreThereAlreadyAreLeftAsTheyAre() throws IOException {
+    Files.writeString(folder.resolve("study.json"), "mine");
+    assertThat(run("template", folder.toString())).isZero();
+    assertThat(folder.resolve("study.json")).hasContent("mine");
+    assertThat(out.toString()).contains("left as it is");
+  }
 }

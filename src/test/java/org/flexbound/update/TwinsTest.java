@@ -119,11 +119,8 @@ class TwinsTest {
   @Tag("long")
   void intervalsCoverAsStatedOverAThousandTestsOfEachTwin() throws IOException {
     StringBuilder text =
-        new StringBuilder(
-            """
-            | structure | status | tests with it | intervals | hold the truth |
-            | --- | --- | --- | --- | --- |
-            """);
+        new StringBuilder("| structure | status | tests with it | intervals | hold the truth |\n");
+    text.append("| --- | --- | --- | --- | --- |\n");
     Coverage all = new Coverage();
     long seed = 1000;
     int tests = Integer.getInteger("twins", LONG);
