@@ -94,7 +94,11 @@ public final class EigenPairs {
     return countedBelow;
   }
 
-  /** The point just above the highest eigenvalue found up to which all were counted; infinite if no count was needed. */
+  /**
+   * The point just above the highest eigenvalue found up to which all were counted; infinite if no count was needed; not a number if every
+   * point tried met an eigenvalue of a leading part of the matrices, so that nothing could be counted and a complete outcome rests on the
+   * settled pairs alone.
+   */
   public double countedAt() {
     return countedAt;
   }
