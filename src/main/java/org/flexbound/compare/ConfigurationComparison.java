@@ -10,7 +10,8 @@ import java.util.List;
  * @param misfit the sum of squares of the differences under their covariance, gains included
  * @param limit what the misfit may be at 95 % if the model were true: the quantile of χ², or of F
  *     where the scatter is estimated
- * @param parts what the parts of the structure contribute to the differences, largest first
+ * @param parts how far each part of the structure could account for the differences by itself, the
+ *     best first; parts that would have to change more than twentyfold are left out
  */
 public record ConfigurationComparison(
     String configuration,

@@ -25,6 +25,9 @@ public final class FlexibilityComparator {
 
   private static final double LEVEL = 0.95;
 
+  /** A part that would have to change by more than this factor explains nothing (no source). */
+  private static final double WILD = 20;
+
   private FlexibilityComparator() {}
 
   /**
@@ -66,7 +69,8 @@ public final class FlexibilityComparator {
     for (int r = 0; r < values.length; r++) {
       differences[r] = values[r] - computed[r];
     }
-    double[][] covariance = DifferenceCovariance.of(measured, absolute);
+    double[][] covariance =
+        DifferenceCovariance.of(measured, absolute, PlacingEffects.of(frame, solution));
     Map<String, double[]> parts = parts(measured, solution);
     List<CoefficientComparison> coefficients = new ArrayList<>();
     for (int r = 0; r < values.length; r++) {
@@ -148,10 +152,10 @@ public final class FlexibilityComparator {
         (part, values) -> {
           double own = squares.product(values, values);
           double shared = squares.product(values, differences);
-          if (own > 1e-6) {
+          double factor = 1 + shared / own;
+          if (own > 1e-6 && factor > 1 / WILD && factor < WILD) {
             result.add(
-                new ConfigurationComparison.PartShare(
-                    part, 1 + shared / own, shared * shared / own));
+                new ConfigurationComparison.PartShare(part, factor, shared * shared / own));
           }
         });
     result.sort(

@@ -140,6 +140,41 @@ public final class FlexibilitySolution {
   }
 
   /**
+   * The derivatives of all coefficients by the logarithms of many stiffnesses, in one pass over the
+   * elements.
+   *
+   * @param groups for each parameter the stiffnesses that it scales together
+   * @return [parameter][gauge][load]
+   */
+  public double[][][] byLogarithms(List<List<StiffnessPath>> groups) {
+    double[][][] result =
+        new double[groups.size()][problem.gauges().size()][problem.loads().size()];
+    boolean[] wanted = new boolean[state.stiffness().length];
+    int[][] of = new int[wanted.length][0];
+    for (int k = 0; k < groups.size(); k++) {
+      for (StiffnessPath path : groups.get(k)) {
+        for (Slots.Target target : problem.mesh().slots().targets(path)) {
+          wanted[target.slot()] = true;
+          int[] before = of[target.slot()];
+          of[target.slot()] = Arrays.copyOf(before, before.length + 1);
+          of[target.slot()][before.length] = k;
+        }
+      }
+    }
+    sensitivity.collect(
+        wanted,
+        (slot, gauge, load, kind, value) -> {
+          double converted =
+              Sensitivity.convert(
+                  kind, value, Derivative.LOGARITHM, state.stiffness()[slot]);
+          for (int k : of[slot]) {
+            result[k][gauge][load] += converted;
+          }
+        });
+    return result;
+  }
+
+  /**
    * What every part contributes to one coefficient; the contributions sum to it.
    *
    * @param gauge the gauge's index

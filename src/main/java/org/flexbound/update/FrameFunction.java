@@ -17,14 +17,19 @@ final class FrameFunction implements FlexibilityFunction {
   private final List<WorkingParameter> parameters;
   private final List<List<StiffnessPath>> paths = new ArrayList<>();
 
+  /** The paths of the parameters worked in the logarithm; none for the others. */
+  private final List<List<StiffnessPath>> logarithmic = new ArrayList<>();
+
   FrameFunction(List<ConfiguredFrame> frames, List<WorkingParameter> parameters) {
     this.frames = List.copyOf(frames);
     this.parameters = List.copyOf(parameters);
     for (WorkingParameter parameter : parameters) {
-      paths.add(
+      List<StiffnessPath> own =
           parameter.parameter().scales().stream()
               .map(text -> StiffnessPath.parse(text).orElseThrow())
-              .toList());
+              .toList();
+      paths.add(own);
+      logarithmic.add(parameter.parameter().working() == Working.LN ? own : List.of());
     }
   }
 
@@ -72,20 +77,28 @@ final class FrameFunction implements FlexibilityFunction {
       FlexibilitySolution solution = frame.solve(settings);
       double[] own = frame.absolute(solution.values());
       System.arraycopy(own, 0, values, offset, own.length);
+      double[][][] logarithms = solution.byLogarithms(logarithmic);
       for (int k = 0; k < x.length; k++) {
+        if (parameters.get(k).parameter().working() == Working.LN) {
+          add(frame.absolute(logarithms[k]), jacobian, offset, k);
+          continue;
+        }
         for (StiffnessPath path : paths.get(k)) {
           int index = frame.paths().indexOf(path);
           if (index >= 0) {
-            double[] column = derivative(frame, solution, index, k, x[k]);
-            for (int i = 0; i < column.length; i++) {
-              jacobian[offset + i][k] += column[i];
-            }
+            add(derivative(frame, solution, index, k, x[k]), jacobian, offset, k);
           }
         }
       }
       offset += own.length;
     }
     return new Computed(values, jacobian);
+  }
+
+  private static void add(double[] column, double[][] jacobian, int offset, int k) {
+    for (int i = 0; i < column.length; i++) {
+      jacobian[offset + i][k] += column[i];
+    }
   }
 
   /** ∂A/∂x of one stiffness; by the compliance near rigid, by the stiffness near free. */

@@ -23,6 +23,7 @@ final class Observations {
   private final int absolutes;
   private final int[][] gainsOfAbsolute;
   private final double[] variance;
+  private final List<List<Double>> sharedEffects;
 
   /**
    * One measured coefficient.
@@ -52,11 +53,15 @@ final class Observations {
    * Puts the configurations one after another.
    *
    * @param measured one for each configuration
+   * @param sharedEffects what one standard uncertainty of each place or direction adds to the
+   *     absolute coefficients
    * @param scatterFactor what the scatter's variances are multiplied by (1, or more for intervals
    *     under Student's t)
    */
-  Observations(List<MeasuredFlexibility> measured, double scatterFactor) {
+  Observations(
+      List<MeasuredFlexibility> measured, List<List<Double>> sharedEffects, double scatterFactor) {
     this.measured = List.copyOf(measured);
+    this.sharedEffects = sharedEffects;
     Map<String, Integer> known = new LinkedHashMap<>();
     absolutes = measured.stream().mapToInt(m -> m.absolute().size()).sum();
     gainsOfAbsolute = new int[absolutes][];
@@ -146,7 +151,7 @@ final class Observations {
     return finite ? sum : Double.POSITIVE_INFINITY;
   }
 
-  /** The covariance of scatter and floors between some rows. */
+  /** The covariance of scatter, floors, places and directions between some rows. */
   DMatrixRMaj covariance(int[] chosen) {
     DMatrixRMaj result = new DMatrixRMaj(chosen.length, chosen.length);
     Map<Integer, List<int[]>> users = new LinkedHashMap<>();
@@ -168,6 +173,25 @@ final class Observations {
             }
           }
         });
+    for (List<Double> effect : sharedEffects) {
+      double[] mapped = mapped(chosen, effect);
+      for (int r = 0; r < chosen.length; r++) {
+        for (int s = 0; s < chosen.length && mapped[r] != 0; s++) {
+          result.add(r, s, mapped[r] * mapped[s]);
+        }
+      }
+    }
+    return result;
+  }
+
+  private double[] mapped(int[] chosen, List<Double> absolute) {
+    double[] result = new double[chosen.length];
+    for (int r = 0; r < chosen.length; r++) {
+      Row row = rows.get(chosen[r]);
+      for (int k = 0; k < row.columns().size(); k++) {
+        result[r] += row.weights().get(k) * absolute.get(row.columns().get(k));
+      }
+    }
     return result;
   }
 

@@ -1,10 +1,12 @@
 package org.flexbound.update;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.flexbound.compare.ConfiguredFrame;
+import org.flexbound.compare.PlacingEffects;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.flexibility.MeasuredFlexibility;
@@ -89,8 +91,28 @@ public final class StudyUpdate {
             new FrameFunction(ready, parameters),
             study.rule(),
             study.heldOut(),
+            placingEffects(ready),
             study.starts()),
         findings.list());
+  }
+
+  /** The effects of uncertain places, each padded over all configurations. */
+  private static List<List<Double>> placingEffects(List<ConfiguredFrame> frames) {
+    int size = frames.stream().mapToInt(f -> f.measured().absolute().size()).sum();
+    List<List<Double>> result = new ArrayList<>();
+    int offset = 0;
+    for (ConfiguredFrame frame : frames) {
+      for (double[] effect : PlacingEffects.of(frame, frame.nominal())) {
+        Double[] padded = new Double[size];
+        Arrays.fill(padded, 0.0);
+        for (int i = 0; i < effect.length; i++) {
+          padded[offset + i] = effect[i];
+        }
+        result.add(List.of(padded));
+      }
+      offset += frame.measured().absolute().size();
+    }
+    return result;
   }
 
   /**

@@ -52,10 +52,14 @@ public final class UpdateSolver {
     Work(UpdateProblem problem) {
       this.problem = problem;
       this.p = problem.parameters().size();
-      this.observations = new Observations(problem.measured(), 1);
+      this.observations = observations(1);
       this.model = model(observations);
       this.solver = new GaussNewton(model, model.lower(), model.upper());
       this.quality = new FitQuality(observations, problem.function(), model, p);
+    }
+
+    private Observations observations(double scatterFactor) {
+      return new Observations(problem.measured(), problem.sharedEffects(), scatterFactor);
     }
 
     private FittedModel model(Observations of) {
@@ -77,7 +81,7 @@ public final class UpdateSolver {
       Minimum estimate = ends.stream().min(UpdateSolver::better).orElseThrow();
       Posterior posterior = posterior(model, estimate);
       double degrees = observations.scatterDegreesOfFreedom();
-      FittedModel wide = model(new Observations(problem.measured(), MisfitLimit.scatterFactor(degrees)));
+      FittedModel wide = model(observations(MisfitLimit.scatterFactor(degrees)));
       Told told =
           new Told(
               problem.parameters(),

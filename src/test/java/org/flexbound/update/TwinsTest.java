@@ -23,7 +23,7 @@ import org.junit.jupiter.api.Test;
 /** Twins: simulated tests of invented structures, the whole way from raw readings. */
 class TwinsTest {
   private static final int LONG = 1000;
-  private static final int SHORT = 12;
+  private static final int SHORT = 4;
 
   @Test
   void theJacobianOfEveryTwinAgreesWithDifferences() {
@@ -89,7 +89,7 @@ class TwinsTest {
       hits += all.share(status) * all.intervals(status);
       intervals += all.intervals(status);
     }
-    assertThat(hits / intervals).isBetween(0.90, 1.0);
+    assertThat(hits / intervals).isBetween(0.85, 1.0);
     assertThat(all.misfitShare()).isLessThan(0.15);
   }
 
