@@ -11,11 +11,13 @@ import org.flexbound.finding.Finding;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Refusal;
+import org.flexbound.finding.Where;
 import org.flexbound.frame.FrameChanges;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.FrameReader;
 import org.flexbound.solve.FrameFlexibility;
 import org.flexbound.study.Configuration;
+import org.flexbound.study.FlexibilityChoice;
 import org.flexbound.study.Study;
 import org.flexbound.study.StudyFinding;
 import org.flexbound.study.StudyReader;
@@ -92,6 +94,23 @@ record StudyFiles(
           study.where(),
           "a study without the key 'model' is not supported yet");
     }
+    if (study.flexibility() instanceof FlexibilityChoice.Truncated) {
+      findings.add(
+          StudyFinding.NOT_SUPPORTED_YET,
+          study.where(),
+          "the key 'flexibility' with a number of modes is not supported yet; use \"full\"");
+    }
+    study
+        .measuredModes()
+        .ifPresent(table -> tableLater(table.where(), "measuredModes", findings));
+    study
+        .outsideFlexibility()
+        .ifPresent(table -> tableLater(table.where(), "outsideFlexibility", findings));
+  }
+
+  private static void tableLater(Where where, String key, Findings findings) {
+    findings.add(
+        StudyFinding.NOT_SUPPORTED_YET, where, "the key '" + key + "' is not supported yet");
   }
 
   private static void later(Json json, String key, Findings findings) {

@@ -117,6 +117,12 @@ public enum TestlogFinding implements FindingKind {
       "Name it, and enter it on the sheet Instruments."),
   /** An option is not known. */
   OPTION("LOG-OPTION", Severity.ERROR, "An option is not known.", "Choose one of those named."),
+  /** Something of the format that does not work yet. */
+  NOT_SUPPORTED_YET(
+      "LOG-NOT-SUPPORTED-YET",
+      Severity.ERROR,
+      "The log asks for something that the program cannot do yet.",
+      "Remove the entry."),
   /** A pattern does not hang together. */
   PATTERN(
       "LOG-PATTERN",

@@ -23,11 +23,13 @@ import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.Unit;
+import org.flexbound.setup.DecisionRule;
 import org.flexbound.setup.Gauge;
 import org.flexbound.setup.Instrument;
 import org.flexbound.setup.LimitSpec;
 import org.flexbound.setup.Load;
 import org.flexbound.setup.ReductionOptions;
+import org.flexbound.setup.SlopeFit;
 
 /** Reads a load-test workbook; all its problems come in one answer. */
 public final class WorkbookLog {
@@ -140,10 +142,34 @@ public final class WorkbookLog {
                         .anyMatch(run -> run.where().sheet().equals(Optional.of(sheet.name()))))
         .filter(sheet -> !key(sheet.name()).equals("examples"))
         .forEach(sheet -> sheet.notes().report(sheet.where(), findings));
+    refuseLater(options, limits);
     return Outcome.of(
         new TestLog(
             information, instruments, loads, gauges, runs, options, limits, List.of(input)),
         findings.list());
+  }
+
+  /** What the format knows and the program does not do yet is refused, never passed over. */
+  private void refuseLater(ReductionOptions options, List<LimitSpec> limits) {
+    if (!limits.isEmpty()) {
+      findings.add(
+          TestlogFinding.NOT_SUPPORTED_YET,
+          limits.get(0).where(),
+          "acceptance limits are not supported yet");
+    }
+    Where sheet = Where.sheet(file.name(), SheetLayout.OPTIONS.name());
+    if (options.slopeFit() == SlopeFit.BOTH_VARIABLES || options.slopeFit() == SlopeFit.ROBUST) {
+      findings.add(
+          TestlogFinding.NOT_SUPPORTED_YET,
+          sheet,
+          "the slope fits 'both variables' and 'robust' are not supported yet");
+    }
+    if (options.decisionRule() != DecisionRule.GUARD_BAND) {
+      findings.add(
+          TestlogFinding.NOT_SUPPORTED_YET,
+          sheet,
+          "the decision rule belongs to acceptance limits, which are not supported yet");
+    }
   }
 
   private void checkNames(List<Claim> claims, List<Instrument> instruments) {
