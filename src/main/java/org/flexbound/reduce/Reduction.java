@@ -1,5 +1,7 @@
 package org.flexbound.reduce;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.flexbound.finding.Finding;
@@ -42,8 +44,8 @@ public record Reduction(
   public Reduction {
     runs = List.copyOf(runs);
     slopes = List.copyOf(slopes);
-    repeatability = Map.copyOf(repeatability);
-    baseMotionShare = Map.copyOf(baseMotionShare);
+    repeatability = Collections.unmodifiableMap(new LinkedHashMap<>(repeatability));
+    baseMotionShare = Collections.unmodifiableMap(new LinkedHashMap<>(baseMotionShare));
     excluded = List.copyOf(excluded);
     findings = List.copyOf(findings);
   }

@@ -1,5 +1,7 @@
 package org.flexbound.reduce;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -37,7 +39,7 @@ public record RunSlope(
   /** Copies the collections. */
   public RunSlope {
     steps = List.copyOf(steps);
-    intercepts = Map.copyOf(intercepts);
+    intercepts = Collections.unmodifiableMap(new LinkedHashMap<>(intercepts));
   }
 
   /**

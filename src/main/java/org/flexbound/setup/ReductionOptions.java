@@ -1,5 +1,7 @@
 package org.flexbound.setup;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.OptionalDouble;
 
@@ -45,7 +47,7 @@ public record ReductionOptions(
 
   /** Copies the map. */
   public ReductionOptions {
-    fitRangeByGauge = Map.copyOf(fitRangeByGauge);
+    fitRangeByGauge = Collections.unmodifiableMap(new LinkedHashMap<>(fitRangeByGauge));
   }
 
   /**

@@ -1,6 +1,7 @@
 package org.flexbound.statistics;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -21,7 +22,7 @@ public record GroupedLine(
     Regression regression) {
   /** Copies the map. */
   public GroupedLine {
-    intercepts = Map.copyOf(intercepts);
+    intercepts = Collections.unmodifiableMap(new LinkedHashMap<>(intercepts));
   }
 
   /**

@@ -47,8 +47,12 @@ final class CurvePart {
   private Curve curve(RunSlope slope, Gauge gauge, Load load) {
     List<CurvePoint> points = new ArrayList<>();
     Map<Integer, LoadStep> branches = new TreeMap<>();
-    // Unused branches have no line; their steps are drawn from the nearest line that there is.
-    double fallback = slope.intercepts().values().stream().findFirst().orElse(0.0);
+    // Unused branches have no line; their steps are drawn from that of the first branch that has one.
+    double fallback =
+        slope.intercepts().entrySet().stream()
+            .min(Map.Entry.comparingByKey())
+            .map(Map.Entry::getValue)
+            .orElse(0.0);
     double sign = 1;
     double largest = 0;
     double tare = tare(slope);
