@@ -7,7 +7,8 @@ import java.util.Arrays;
  *
  * <p>A turning point counts only where the load then goes back by more than {@link #TURN} of its
  * range, so that noise and small corrections of the jack make no branches. A new cycle begins where
- * the load leaves zero again after a peak.
+ * the load leaves zero again after a peak; where it is pulled and pushed, only on the side on which
+ * it first left zero, so that both halves belong to one cycle.
  */
 final class Branches {
   /** Share of the range by which the load must go back for a turning point. */
@@ -82,11 +83,16 @@ final class Branches {
     int current = 1;
     boolean loaded = false;
     boolean returned = false;
+    double firstSide = 0;
+    boolean bothSides =
+        Arrays.stream(load).anyMatch(value -> value > 0.5 * peak)
+            && Arrays.stream(load).anyMatch(value -> value < -0.5 * peak);
     for (int k = 0; k < load.length; k++) {
       double magnitude = Math.abs(load[k]);
       if (magnitude > NONE * peak) {
+        firstSide = firstSide == 0 ? Math.signum(load[k]) : firstSide;
         if (returned) {
-          current++;
+          current += !bothSides || Math.signum(load[k]) == firstSide ? 1 : 0;
           returned = false;
         }
         loaded |= magnitude > 0.5 * peak;

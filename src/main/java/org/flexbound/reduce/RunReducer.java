@@ -19,8 +19,8 @@ import org.flexbound.testlog.Run;
 
 /** Reduces one run: steps, branches, a slope for every gauge and varied load. */
 final class RunReducer {
-  /** A load whose range is below this share of the largest did not vary. */
-  private static final double VARIED = 1e-3;
+  /** A load whose range is below this share of the largest did not vary: an idle cell wanders. */
+  private static final double VARIED = 1e-2;
 
   /** Loads whose correlation leaves less than this unexplained moved in proportion. */
   private static final double PROPORTIONAL = 1e-4;
@@ -66,6 +66,8 @@ final class RunReducer {
       for (StepGrouping.RawStep step : steps) {
         peak = Math.max(peak, Math.abs(step.load[l]));
       }
+    }
+    for (int l = 0; l < run.loads().size(); l++) {
       checkLimit(l);
     }
     if (varied.isEmpty()) {
@@ -136,8 +138,10 @@ final class RunReducer {
       return;
     }
     double limit = known.limit().getAsDouble();
-    for (double value : column(load)) {
-      if (Math.abs(value) > limit) {
+    // every reading counts, not the mean of its step: an overshoot must not hide in a held step
+    for (StepGrouping.RawStep step : steps) {
+      double value = step.largestLoad[load];
+      if (value > limit) {
         findings.add(
             ReduceFinding.LOAD_LIMIT,
             run.where(),
@@ -145,7 +149,7 @@ final class RunReducer {
                 java.util.Locale.ROOT,
                 "'%s' reached %.4g in run '%s'; its limit is %.4g (SI)",
                 known.name(),
-                Math.abs(value),
+                value,
                 run.name(),
                 limit));
         return;

@@ -23,6 +23,7 @@ final class StepGrouping {
   static final class RawStep {
     final String label;
     final double[] load;
+    final double[] largestLoad;
     final double[] motion;
     final double[] squares;
     final int[] counts;
@@ -32,6 +33,7 @@ final class StepGrouping {
     RawStep(String label, int loads, int gauges) {
       this.label = label;
       this.load = new double[loads];
+      this.largestLoad = new double[loads];
       this.motion = new double[gauges];
       this.squares = new double[gauges];
       this.counts = new int[gauges];
@@ -43,6 +45,7 @@ final class StepGrouping {
       readings++;
       for (int l = 0; l < load.length; l++) {
         load[l] += (reading.load(l) - load[l]) / readings;
+        largestLoad[l] = Math.max(largestLoad[l], Math.abs(reading.load(l)));
       }
       for (int g = 0; g < motion.length; g++) {
         double value = reading.gauge(g);

@@ -167,4 +167,27 @@ class ReducerTest {
         .isCloseTo(2e-6, within(1e-15));
     assertThat(reduction.runs().get(0).cycles()).isEqualTo(2);
   }
+
+  @Test
+  void pullAndPushAreOneCycleAndBothAreUsed() {
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0, 0, 0)
+            .instrument("dial", 0, 0, 0)
+            .load("LA", "A", DOWN, "cell")
+            .gauge("GA", "A", DOWN, "dial", false);
+    double[][] pull = rows(new double[] {2e-6}, 0, new Random(1));
+    double[][] both = new double[22][];
+    for (int k = 0; k < 11; k++) {
+      both[k] = pull[k];
+      both[11 + k] = new double[] {-pull[k][0], 0.001 - 2e-6 * pull[k][0]};
+    }
+    maker.run("1", "LA", both);
+    Reduction reduction = reduce(maker);
+    assertThat(reduction.runs().get(0).cycles()).isEqualTo(1);
+    assertThat(reduction.slopes().get(0).steps())
+        .filteredOn(step -> step.fate() == LoadStep.Fate.FITTED)
+        .extracting(LoadStep::load)
+        .contains(1000.0, -1000.0);
+  }
 }
