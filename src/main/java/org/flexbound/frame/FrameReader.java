@@ -44,7 +44,7 @@ public final class FrameReader {
   private FrameReader() {}
 
   /**
-   * Reads a model from a file: JSON, or a workbook (.xlsx) with one sheet per key.
+   * Reads a model from a JSON file.
    *
    * @param file where it lies
    * @param shownName its name in messages
