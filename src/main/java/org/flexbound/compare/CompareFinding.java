@@ -36,35 +36,14 @@ public enum CompareFinding implements FindingKind {
       "A measured coefficient has the sign opposite to the computed one.",
       "Look at the direction of the gauge and of the load.");
 
-  private final String code;
-  private final Severity severity;
-  private final String meaning;
-  private final String remedy;
+  private final Definition definition;
 
   CompareFinding(String code, Severity severity, String meaning, String remedy) {
-    this.code = code;
-    this.severity = severity;
-    this.meaning = meaning;
-    this.remedy = remedy;
+    this.definition = new Definition(code, severity, meaning, remedy);
   }
 
   @Override
-  public String code() {
-    return code;
-  }
-
-  @Override
-  public Severity severity() {
-    return severity;
-  }
-
-  @Override
-  public String meaning() {
-    return meaning;
-  }
-
-  @Override
-  public String remedy() {
-    return remedy;
+  public Definition definition() {
+    return definition;
   }
 }

@@ -73,39 +73,18 @@ public enum DocumentFinding implements FindingKind {
       "How a CSV file is written (separator, decimal sign, encoding) was found out from its text.",
       "State it in the description of the log if it was found wrongly.");
 
-  private final String code;
-  private final Severity severity;
-  private final String meaning;
-  private final String remedy;
+  private final Definition definition;
 
   DocumentFinding(String code, String meaning, String remedy) {
     this(code, Severity.ERROR, meaning, remedy);
   }
 
   DocumentFinding(String code, Severity severity, String meaning, String remedy) {
-    this.code = code;
-    this.severity = severity;
-    this.meaning = meaning;
-    this.remedy = remedy;
+    this.definition = new Definition(code, severity, meaning, remedy);
   }
 
   @Override
-  public String code() {
-    return code;
-  }
-
-  @Override
-  public Severity severity() {
-    return severity;
-  }
-
-  @Override
-  public String meaning() {
-    return meaning;
-  }
-
-  @Override
-  public String remedy() {
-    return remedy;
+  public Definition definition() {
+    return definition;
   }
 }

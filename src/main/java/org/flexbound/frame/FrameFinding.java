@@ -84,33 +84,15 @@ public enum FrameFinding implements FindingKind {
       "An entry of the model is used by nothing.",
       "Take it out, or use it, if that was not meant.");
 
-  private final Severity severity;
-  private final String meaning;
-  private final String remedy;
+  private final Definition definition;
 
   FrameFinding(Severity severity, String meaning, String remedy) {
-    this.severity = severity;
-    this.meaning = meaning;
-    this.remedy = remedy;
+    this.definition =
+        new Definition("FRAME-" + name().replace('_', '-'), severity, meaning, remedy);
   }
 
   @Override
-  public String code() {
-    return "FRAME-" + name().replace('_', '-');
-  }
-
-  @Override
-  public Severity severity() {
-    return severity;
-  }
-
-  @Override
-  public String meaning() {
-    return meaning;
-  }
-
-  @Override
-  public String remedy() {
-    return remedy;
+  public Definition definition() {
+    return definition;
   }
 }

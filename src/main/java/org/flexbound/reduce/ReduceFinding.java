@@ -123,35 +123,14 @@ public enum ReduceFinding implements FindingKind {
       "Uncertainties of places and angles are not included.",
       "State them, and compare with a model: only it knows what they do.");
 
-  private final String code;
-  private final Severity severity;
-  private final String meaning;
-  private final String remedy;
+  private final Definition definition;
 
   ReduceFinding(String code, Severity severity, String meaning, String remedy) {
-    this.code = code;
-    this.severity = severity;
-    this.meaning = meaning;
-    this.remedy = remedy;
+    this.definition = new Definition(code, severity, meaning, remedy);
   }
 
   @Override
-  public String code() {
-    return code;
-  }
-
-  @Override
-  public Severity severity() {
-    return severity;
-  }
-
-  @Override
-  public String meaning() {
-    return meaning;
-  }
-
-  @Override
-  public String remedy() {
-    return remedy;
+  public Definition definition() {
+    return definition;
   }
 }

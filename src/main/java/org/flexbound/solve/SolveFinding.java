@@ -81,33 +81,15 @@ public enum SolveFinding implements FindingKind {
       "Not all of the modes asked for were found to full accuracy.",
       "Ask for fewer modes, or look for parts that are far too stiff or far too soft.");
 
-  private final Severity severity;
-  private final String meaning;
-  private final String remedy;
+  private final Definition definition;
 
   SolveFinding(Severity severity, String meaning, String remedy) {
-    this.severity = severity;
-    this.meaning = meaning;
-    this.remedy = remedy;
+    this.definition =
+        new Definition("SOLVE-" + name().replace('_', '-'), severity, meaning, remedy);
   }
 
   @Override
-  public String code() {
-    return "SOLVE-" + name().replace('_', '-');
-  }
-
-  @Override
-  public Severity severity() {
-    return severity;
-  }
-
-  @Override
-  public String meaning() {
-    return meaning;
-  }
-
-  @Override
-  public String remedy() {
-    return remedy;
+  public Definition definition() {
+    return definition;
   }
 }

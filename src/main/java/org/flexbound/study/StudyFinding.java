@@ -60,35 +60,14 @@ public enum StudyFinding implements FindingKind {
       "A held-out load case is in no log of the study.",
       "Correct the name of the load or of the configuration.");
 
-  private final String code;
-  private final Severity severity;
-  private final String meaning;
-  private final String remedy;
+  private final Definition definition;
 
   StudyFinding(String code, Severity severity, String meaning, String remedy) {
-    this.code = code;
-    this.severity = severity;
-    this.meaning = meaning;
-    this.remedy = remedy;
+    this.definition = new Definition(code, severity, meaning, remedy);
   }
 
   @Override
-  public String code() {
-    return code;
-  }
-
-  @Override
-  public Severity severity() {
-    return severity;
-  }
-
-  @Override
-  public String meaning() {
-    return meaning;
-  }
-
-  @Override
-  public String remedy() {
-    return remedy;
+  public Definition definition() {
+    return definition;
   }
 }

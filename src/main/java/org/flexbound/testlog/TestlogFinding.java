@@ -136,35 +136,14 @@ public enum TestlogFinding implements FindingKind {
       "A load or a gauge has no place.",
       "State a node, a member and where along it, or X, Y and Z.");
 
-  private final String code;
-  private final Severity severity;
-  private final String meaning;
-  private final String remedy;
+  private final Definition definition;
 
   TestlogFinding(String code, Severity severity, String meaning, String remedy) {
-    this.code = code;
-    this.severity = severity;
-    this.meaning = meaning;
-    this.remedy = remedy;
+    this.definition = new Definition(code, severity, meaning, remedy);
   }
 
   @Override
-  public String code() {
-    return code;
-  }
-
-  @Override
-  public Severity severity() {
-    return severity;
-  }
-
-  @Override
-  public String meaning() {
-    return meaning;
-  }
-
-  @Override
-  public String remedy() {
-    return remedy;
+  public Definition definition() {
+    return definition;
   }
 }
