@@ -126,8 +126,8 @@ final class Summary {
           Rounded.value(d, u),
           Rounded.uncertainty(u),
           units.symbol(p.unit()),
-          Rounded.fixed(p.z(), 1),
-          Math.abs(p.z()) > FAR ? "!" : "");
+          p.z().isPresent() ? Rounded.fixed(p.z().getAsDouble(), 1) : "–",
+          Math.abs(p.z().orElse(0)) > FAR ? "!" : "");
     }
     table.print(out);
   }

@@ -92,18 +92,6 @@ public enum ReduceFinding implements FindingKind {
       Severity.WARNING,
       "Most of a reading is base motion.",
       "Stiffen the base, or measure from a stand on it."),
-  /** Reciprocity fails. */
-  NOT_RECIPROCAL(
-      "RED-NOT-RECIPROCAL",
-      Severity.WARNING,
-      "Two coefficients that should be equal are not.",
-      "Check gains, directions and places of the two gauges and the two loads."),
-  /** A direct coefficient is not positive or a bound is broken. */
-  NOT_POSITIVE(
-      "RED-NOT-POSITIVE",
-      Severity.WARNING,
-      "Coefficients break a bound that every elastic structure keeps.",
-      "Check directions and columns of the gauges and loads named."),
   /** Something was not measured. */
   NOT_MEASURED(
       "RED-NOT-MEASURED",
@@ -115,13 +103,7 @@ public enum ReduceFinding implements FindingKind {
       "RED-NOTHING-MEASURED",
       Severity.ERROR,
       "No flexibility coefficient could be found.",
-      "Check that loads vary and gauges are read within the fit range."),
-  /** Placing uncertainty not included. */
-  PLACING(
-      "RED-PLACING",
-      Severity.NOTE,
-      "Uncertainties of places and angles are not included.",
-      "State them, and compare with a model: only it knows what they do.");
+      "Check that loads vary and gauges are read within the fit range.");
 
   private final Definition definition;
 

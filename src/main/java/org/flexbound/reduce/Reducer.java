@@ -7,8 +7,8 @@ import java.util.List;
 import java.util.Map;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
+import org.flexbound.flexibility.MatrixChecks;
 import org.flexbound.flexibility.MeasuredFlexibility;
-import org.flexbound.flexibility.ReciprocityTable;
 import org.flexbound.setup.Gauge;
 import org.flexbound.setup.Instrument;
 import org.flexbound.setup.Load;
@@ -69,8 +69,12 @@ public final class Reducer {
     RunPooling pooling = new RunPooling(log, slopes, findings);
     FlexibilityBuilder builder = new FlexibilityBuilder(problem, pooling, findings);
     MeasuredFlexibility flexibility = builder.build();
-    ReciprocityTable reciprocity = ReciprocityTable.of(flexibility, problem.places()::of);
-    judgeMatrix(log, reciprocity, findings);
+    MatrixChecks checks =
+        MatrixChecks.of(
+            flexibility,
+            problem.places()::of,
+            log.options().qualityLimits().reciprocityZ());
+    new MatrixJudgement(log.gauges(), findings).judge(checks);
     return Outcome.of(
         new Reduction(
             flexibility,
@@ -82,7 +86,7 @@ public final class Reducer {
             builder.calibrationIncluded(),
             pooling.repeatability(),
             builder.baseShares(),
-            reciprocity,
+            checks,
             excluded,
             findings.list()),
         findings.list());
@@ -104,29 +108,6 @@ public final class Reducer {
             gauge.where(),
             "no run measured the gauge '" + gauge.name() + "'");
       }
-    }
-  }
-
-  private static void judgeMatrix(TestLog log, ReciprocityTable table, Findings findings) {
-    double limit = log.options().qualityLimits().reciprocityZ();
-    for (ReciprocityTable.Pair pair : table.pairs()) {
-      if (Math.abs(pair.z()) > limit) {
-        findings.add(
-            ReduceFinding.NOT_RECIPROCAL,
-            org.flexbound.finding.Where.nowhere(),
-            String.format(
-                java.util.Locale.ROOT,
-                "%s and %s should be equal but differ by %.1f standard uncertainties (%.1f %%)",
-                pair.first(),
-                pair.second(),
-                Math.abs(pair.z()),
-                100 * Math.abs(pair.difference())
-                    / Math.max(Math.abs(pair.firstValue()), Math.abs(pair.secondValue()))));
-      }
-    }
-    for (ReciprocityTable.Breach breach : table.breaches()) {
-      findings.add(
-          ReduceFinding.NOT_POSITIVE, org.flexbound.finding.Where.nowhere(), breach.message());
     }
   }
 }

@@ -5,6 +5,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.flexbound.finding.Finding;
+import org.flexbound.flexibility.MatrixChecks;
 import org.flexbound.flexibility.MeasuredFlexibility;
 import org.flexbound.flexibility.ReciprocityTable;
 import org.flexbound.statistics.PooledScatter;
@@ -23,7 +24,7 @@ import org.flexbound.statistics.PooledScatter;
  *     ({@code gauge|load})
  * @param baseMotionShare share of each corrected coefficient's absolute value that was base motion,
  *     by gauge and load
- * @param reciprocity pairs that should be equal
+ * @param matrix what every elastic structure keeps, held against the matrix
  * @param excluded what was left out
  * @param findings everything noticed
  */
@@ -37,7 +38,7 @@ public record Reduction(
     boolean calibrationIncluded,
     Map<String, Double> repeatability,
     Map<String, Double> baseMotionShare,
-    ReciprocityTable reciprocity,
+    MatrixChecks matrix,
     List<Exclusion> excluded,
     List<Finding> findings) {
   /** Copies the collections. */
@@ -48,6 +49,15 @@ public record Reduction(
     baseMotionShare = Collections.unmodifiableMap(new LinkedHashMap<>(baseMotionShare));
     excluded = List.copyOf(excluded);
     findings = List.copyOf(findings);
+  }
+
+  /**
+   * The reciprocal pairs.
+   *
+   * @return pairs that should be equal, and all of them together
+   */
+  public ReciprocityTable reciprocity() {
+    return matrix.reciprocity();
   }
 
   /**

@@ -121,4 +121,18 @@ public final class Quantiles {
   public static double sidak(double jointLevel, int tests) {
     return -Math.expm1(Math.log1p(-jointLevel) / tests);
   }
+
+  /**
+   * The limit on |t| of one of several tests, such that all together raise a false alarm as seldom
+   * as one normal test would with its own limit.
+   *
+   * @param single the limit on |z| of one test alone with a known uncertainty, e.g. 3
+   * @param tests how many tests, at least 1
+   * @param degreesOfFreedom of the estimated uncertainty; infinite where it is known
+   * @return the two-sided limit
+   */
+  public static double manyStudentT(double single, int tests, double degreesOfFreedom) {
+    double level = sidak(2 * normalProbability(-single), tests);
+    return -studentT(level / 2, degreesOfFreedom);
+  }
 }

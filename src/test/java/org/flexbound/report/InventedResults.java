@@ -161,11 +161,30 @@ final class InventedResults {
         List.of(
             new Reciprocity(
                 CONFIGURATION, gauge(0) + " / " + load(1), gauge(1) + " / " + load(0), 1.02e-6,
-                1.00e-6, "m/N", 2e-8, 1.1e-8, 1.82)),
+                1.00e-6, "m/N", 2e-8, 1.1e-8,
+                OptionalDouble.of(1.82))),
         List.of(
             new JointTest(
                 CONFIGURATION, "Reciprocity of all pairs", 3.3, OptionalDouble.of(7.8),
                 OptionalDouble.of(3), OptionalDouble.of(0.35), true, "")),
+        List.of(
+            new MatrixCheck(
+                CONFIGURATION,
+                Optional.of(
+                    new SmallestEigenvalue(
+                        List.of(load(0), load(1)), 0.2, 0.01, OptionalDouble.of(20), 3,
+                        List.of(0.6, -0.8), true)),
+                List.of(
+                    new BoundCheck(
+                        gauge(0) + " under " + load(1), false, 0.8, OptionalDouble.of(-20), 3, true)),
+                List.of(
+                    new PointGain(
+                        gauge(0), load(0), 25.4, Math.log(25.4), 0.01, OptionalDouble.of(300), 3,
+                        true)),
+                List.of(
+                    new TripleProduct(
+                        List.of(load(0), load(1), load(0)), 1.01, OptionalDouble.of(1), 3, true)),
+                List.of(new Hint(name.apply("a gauge reversed"), "it fits", 500, 2)))),
         Optional.of(structure()),
         comparison,
         List.of(

@@ -53,7 +53,8 @@ public final class ReciprocityFigure {
           share,
           row,
           pair.first() + " and " + pair.second()
-              + "\ndifference " + Rounded.fixed(share, 2) + " %, z " + Rounded.fixed(pair.z(), 1));
+              + "\ndifference " + Rounded.fixed(share, 2) + " %, z "
+              + (pair.z().isPresent() ? Rounded.fixed(pair.z().getAsDouble(), 1) : "not known"));
     }
     XYIntervalSeriesCollection data = new XYIntervalSeriesCollection();
     data.addSeries(series);

@@ -25,6 +25,7 @@ import org.flexbound.report.results.Input;
 import org.flexbound.report.results.Instrument;
 import org.flexbound.report.results.JointTest;
 import org.flexbound.report.results.Load;
+import org.flexbound.report.results.MatrixCheck;
 import org.flexbound.report.results.OperatorRow;
 import org.flexbound.report.results.Option;
 import org.flexbound.report.results.Parameter;
@@ -55,6 +56,7 @@ public final class Gathering {
   private final List<OperatorRow> baseMotion = new ArrayList<>();
   private final List<Reciprocity> reciprocity = new ArrayList<>();
   private final List<JointTest> jointTests = new ArrayList<>();
+  private final List<MatrixCheck> matrixChecks = new ArrayList<>();
   private final List<Energy> energy = new ArrayList<>();
   private final List<Curve> curves = new ArrayList<>();
   private final Map<String, String> units = new LinkedHashMap<>();
@@ -147,6 +149,7 @@ public final class Gathering {
     baseMotion.addAll(part.baseMotion());
     reciprocity.addAll(part.reciprocity());
     jointTests.addAll(part.jointTests());
+    matrixChecks.add(MatrixPart.of(part.configuration(), reduction.matrix()));
     units.putAll(part.units());
     CurvePart curvePart = new CurvePart(reduction, log);
     curves.addAll(curvePart.curves());
@@ -204,6 +207,7 @@ public final class Gathering {
         baseMotion,
         reciprocity,
         jointTests,
+        matrixChecks,
         model.map(m -> StructurePart.of(m, modelFile)),
         comparison.map(part::comparison).orElse(List.<Comparison>of()),
         comparison.map(ComparisonPart::tests).orElse(List.<JointTest>of()),

@@ -10,6 +10,8 @@ import org.flexbound.flexibility.CoefficientUncertainty;
 import org.flexbound.flexibility.Gain;
 import org.flexbound.flexibility.LinearMap;
 import org.flexbound.flexibility.MeasuredFlexibility;
+import org.flexbound.flexibility.Bound;
+import org.flexbound.flexibility.MatrixChecks;
 import org.flexbound.flexibility.ReciprocityTable;
 import org.flexbound.reduce.Reduction;
 import org.flexbound.reduce.RunResult;
@@ -32,7 +34,7 @@ import org.flexbound.testlog.TestLog;
 
 /** What a reduction found in one configuration. */
 final class ReductionPart {
-  private static final double JOINT_LIMIT = 0.05;
+  private static final double JOINT_LIMIT = MatrixChecks.JOINT_LEVEL;
 
   /** A motion smaller than this many uncertainties has no span that figures could be shares of. */
   private static final double SEEN = 3;
@@ -47,7 +49,7 @@ final class ReductionPart {
     this.log = log;
   }
 
-  private String configuration() {
+  String configuration() {
     return flexibility.configuration();
   }
 
@@ -287,7 +289,7 @@ final class ReductionPart {
                     pairUnit(p),
                     p.difference(),
                     p.standardUncertainty(),
-                    Values.orZero(p.z())))
+                    p.z()))
         .toList();
   }
 
@@ -304,7 +306,7 @@ final class ReductionPart {
   List<JointTest> jointTests() {
     ReciprocityTable table = reduction.reciprocity();
     List<JointTest> result = new ArrayList<>();
-    if (!table.pairs().isEmpty()) {
+    if (table.degreesOfFreedom() > 0) {
       boolean passed = !(table.probability() < JOINT_LIMIT);
       result.add(
           new JointTest(
@@ -312,8 +314,11 @@ final class ReductionPart {
               "Reciprocity of all pairs together",
               Values.orZero(table.statistic()),
               Values.finite(
-                  org.flexbound.statistics.Quantiles.chiSquared(
-                      1 - JOINT_LIMIT, table.degreesOfFreedom())),
+                  table.degreesOfFreedom()
+                      * org.flexbound.statistics.Quantiles.f(
+                          1 - JOINT_LIMIT,
+                          table.degreesOfFreedom(),
+                          flexibility.scatterDegreesOfFreedom())),
               OptionalDouble.of(table.degreesOfFreedom()),
               Values.finite(table.probability()),
               passed,
@@ -321,20 +326,56 @@ final class ReductionPart {
                   ? "the pairs agree within their uncertainty"
                   : "the pairs disagree by more than chance explains"));
     }
-    table
-        .breaches()
-        .forEach(
-            breach ->
+    long broken = reduction.matrix().bounds().stream().filter(Bound::broken).count();
+    if (!reduction.matrix().bounds().isEmpty()) {
+      result.add(
+          new JointTest(
+              configuration(),
+              "Bounds of an elastic structure that are broken",
+              broken,
+              OptionalDouble.of(0),
+              OptionalDouble.empty(),
+              OptionalDouble.empty(),
+              broken == 0,
+              "of " + reduction.matrix().bounds().size() + " bounds"));
+    }
+    reduction
+        .matrix()
+        .definiteness()
+        .ifPresent(
+            d ->
                 result.add(
                     new JointTest(
                         configuration(),
-                        "Bounds of an elastic structure",
-                        0,
+                        "Smallest eigenvalue of the square part, in standard uncertainties",
+                        d.z().orElse(d.smallest()),
+                        OptionalDouble.of(-d.limit()),
                         OptionalDouble.empty(),
                         OptionalDouble.empty(),
-                        OptionalDouble.empty(),
-                        false,
-                        breach.message())));
+                        !d.broken(),
+                        "of " + d.points().size() + " points; may not lie below its limit")));
+    reduction
+        .matrix()
+        .gainPattern()
+        .filter(g -> g.degreesOfFreedom() > 0)
+        .ifPresent(
+            g ->
+                result.add(
+                    new JointTest(
+                        configuration(),
+                        "Gains alone as the reason for what the pairs differ by",
+                        g.misfit(),
+                        Values.finite(
+                            g.degreesOfFreedom()
+                                * org.flexbound.statistics.Quantiles.f(
+                                    1 - JOINT_LIMIT,
+                                    g.degreesOfFreedom(),
+                                    flexibility.scatterDegreesOfFreedom())),
+                        OptionalDouble.of(g.degreesOfFreedom()),
+                        Values.finite(g.probability()),
+                        !(g.probability() < JOINT_LIMIT),
+                        "whether differing scales of gauges and loads, and nothing else, could be"
+                            + " behind the differences")));
     return result;
   }
 }

@@ -1,6 +1,7 @@
 package org.flexbound.report.page;
 
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import org.flexbound.report.Rounded;
@@ -91,7 +92,7 @@ final class AnswerSection {
     long bad = results.runs().stream().filter(r -> r.verdict().equals("repeat")).count();
     long doubtful = results.runs().stream().filter(r -> r.verdict().equals("doubtful")).count();
     List<JointTest> failed = results.jointTests().stream().filter(t -> !t.passed()).toList();
-    long pairs = results.reciprocity().stream().filter(p -> Math.abs(p.z()) > FAR).count();
+    long pairs = results.reciprocity().stream().filter(p -> Math.abs(p.z().orElse(0)) > FAR).count();
     List<String> details = new ArrayList<>();
     details.add(
         Shown.count(results.runs().size() - bad - doubtful, "run is", "runs are")
@@ -142,7 +143,8 @@ final class AnswerSection {
 
   private static String worst(List<Reciprocity> pairs) {
     return pairs.stream()
-        .max((a, b) -> Double.compare(Math.abs(a.z()), Math.abs(b.z())))
+        .filter(p -> p.z().isPresent())
+        .max(Comparator.comparingDouble(p -> Math.abs(p.z().orElse(0))))
         .map(
             p ->
                 " (largest: "
@@ -150,7 +152,7 @@ final class AnswerSection {
                     + " against "
                     + p.second()
                     + ", z "
-                    + Rounded.fixed(p.z(), 1)
+                    + Rounded.fixed(p.z().orElse(0), 1)
                     + ")")
         .orElse("");
   }

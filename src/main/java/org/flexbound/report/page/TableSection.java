@@ -37,6 +37,7 @@ final class TableSection {
     add(blocks, coefficients());
     add(blocks, quality());
     add(blocks, reciprocity());
+    new MatrixTables(results).add(blocks);
     add(blocks, comparison());
     add(blocks, parameters());
     add(blocks, gains());
@@ -198,7 +199,7 @@ final class TableSection {
               Block.Cell.of(shown.value(p.secondValue(), p.standardUncertainty(), p.unit())),
               Block.Cell.of(shown.value(p.difference(), p.standardUncertainty(), p.unit())),
               Block.Cell.of(shown.uncertainty(p.standardUncertainty(), p.unit())),
-              z(p.z()),
+              p.z().isPresent() ? z(p.z().getAsDouble()) : Block.Cell.of("–"),
               Block.Cell.of(shown.symbol(p.unit()))));
     }
     return table;

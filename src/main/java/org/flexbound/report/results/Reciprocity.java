@@ -1,5 +1,7 @@
 package org.flexbound.report.results;
 
+import java.util.OptionalDouble;
+
 /**
  * A pair of absolute coefficients that should be equal (Maxwell-Betti).
  *
@@ -12,7 +14,7 @@ package org.flexbound.report.results;
  * @param difference first less second
  * @param standardUncertainty standard uncertainty of the difference, shared gains cancelling
  *     as they should
- * @param z difference over its standard uncertainty
+ * @param z difference over its standard uncertainty; empty where nothing is known of it
  */
 public record Reciprocity(
     String configuration,
@@ -23,4 +25,4 @@ public record Reciprocity(
     String unit,
     double difference,
     double standardUncertainty,
-    double z) {}
+    OptionalDouble z) {}

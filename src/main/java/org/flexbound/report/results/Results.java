@@ -26,6 +26,7 @@ import java.util.Optional;
  * @param baseMotion the base-motion operator: how the coefficients come from the absolute ones
  * @param reciprocity pairs that should be equal
  * @param jointTests tests of several quantities together
+ * @param matrixChecks what every elastic structure keeps, held against the matrices
  * @param structure the frame model, for its drawing
  * @param comparison measured against computed
  * @param modelTests the model against all coefficients of a configuration together
@@ -58,6 +59,7 @@ public record Results(
     List<OperatorRow> baseMotion,
     List<Reciprocity> reciprocity,
     List<JointTest> jointTests,
+    List<MatrixCheck> matrixChecks,
     Optional<Structure> structure,
     List<Comparison> comparison,
     List<JointTest> modelTests,
@@ -88,6 +90,7 @@ public record Results(
     baseMotion = List.copyOf(baseMotion);
     reciprocity = List.copyOf(reciprocity);
     jointTests = List.copyOf(jointTests);
+    matrixChecks = List.copyOf(matrixChecks);
     comparison = List.copyOf(comparison);
     modelTests = List.copyOf(modelTests);
     contributions = List.copyOf(contributions);

@@ -54,6 +54,7 @@ public final class ResultsWorkbook {
       coefficients();
       covariance();
       reciprocity();
+      MatrixSheets.write(workbook, styles, results);
       comparison();
       parameters();
       findings();
