@@ -10,7 +10,8 @@ import picocli.CommandLine.Parameters;
     mixinStandardHelpOptions = true,
     versionProvider = Version.class,
     sortOptions = false,
-    description = {"Reduces the readings of a load test to flexibility coefficients.", "", "LOG is a load-test workbook (.xlsx; flexbound template DIR makes a blank one)."})
+    description = {"Reduces the readings of a load test to flexibility coefficients.", "", "LOG is a load-test workbook (.xlsx), or a description (.json) of the files of another program;",
+      "flexbound template DIR writes one of each to start from."})
 final class ReduceCommand implements Callable<Integer> {
   private final Terminal terminal;
 

@@ -22,6 +22,7 @@ import org.flexbound.study.Study;
 import org.flexbound.study.StudyFinding;
 import org.flexbound.study.StudyReader;
 import org.flexbound.testlog.InputFile;
+import org.flexbound.testlog.LogFile;
 import org.flexbound.testlog.TestLog;
 import org.flexbound.testlog.WorkbookLog;
 
@@ -149,7 +150,7 @@ record StudyFiles(
       return Optional.empty();
     }
     String name = configuration.log().get();
-    Outcome<TestLog> read = WorkbookLog.read(folder.resolve(name), name);
+    Outcome<TestLog> read = LogFile.read(folder.resolve(name), name);
     findings.addAll(read.findings());
     read.value().ifPresent(log -> inputs.addAll(log.inputs()));
     Optional<FrameModel> changed = model;

@@ -16,7 +16,12 @@ import org.flexbound.testlog.TemplateWorkbook;
 
 /** Writes the files to start from. */
 final class Templates {
-  private static final List<String> RESOURCES = List.of("frame-model.json", "study.json");
+  private static final List<String> RESOURCES = List.of(
+          "frame-model.json",
+          "study.json",
+          "log-description.json",
+          "logger-mid.csv",
+          "logger-tip.csv");
 
   private final Terminal terminal;
 

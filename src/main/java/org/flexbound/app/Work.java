@@ -22,7 +22,7 @@ import org.flexbound.report.gather.Gathering;
 import org.flexbound.report.results.Results;
 import org.flexbound.study.Study;
 import org.flexbound.testlog.TestLog;
-import org.flexbound.testlog.WorkbookLog;
+import org.flexbound.testlog.LogFile;
 import org.flexbound.update.StudyUpdate;
 import org.flexbound.update.UpdateResult;
 
@@ -39,7 +39,7 @@ final class Work {
   ExitCode reduce(Path file) {
     String name = String.valueOf(file.getFileName());
     Findings findings = new Findings();
-    Outcome<TestLog> read = WorkbookLog.read(file, name);
+    Outcome<TestLog> read = LogFile.read(file, name);
     findings.addAll(read.findings());
     findings.refuseIfErrors();
     TestLog log = read.orRefuse();

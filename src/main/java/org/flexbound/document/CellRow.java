@@ -130,7 +130,7 @@ final class CellRow implements Row {
   public String text(int column) {
     return switch (kind(column)) {
       case BLANK -> "";
-      case NUMBER -> shortest(numbers[column]);
+      case NUMBER -> DecimalText.shortest(numbers[column]);
       case DATE -> date(numbers[column]);
       case TEXT, TRUTH, ERROR -> texts[column];
     };
@@ -143,17 +143,10 @@ final class CellRow implements Row {
 
   private String date(double days) {
     if (days > LAST_DAY) {
-      return shortest(days);
+      return DecimalText.shortest(days);
     }
     LocalDateTime date = DateUtil.getLocalDateTime(days, from1904);
-    return date == null ? shortest(days) : date.toString();
-  }
-
-  /** The shortest decimal text that reads back to the same number; whole numbers without a point. */
-  static String shortest(double value) {
-    return value == Math.rint(value) && Math.abs(value) < 1e15
-        ? String.valueOf((long) value)
-        : String.valueOf(value);
+    return date == null ? DecimalText.shortest(days) : date.toString();
   }
 
   /** The letters of a column, from 0 for A. */

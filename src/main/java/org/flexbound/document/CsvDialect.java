@@ -100,18 +100,27 @@ record CsvDialect(
     return true;
   }
 
+  /** Whether the head of the file is text in the encoding. */
+  boolean canDecode(byte[] head, boolean whole) {
+    return isText(head, markBytes, whole, charset);
+  }
+
   private static boolean isUtf8(byte[] head, boolean whole) {
+    return isText(head, 0, whole, StandardCharsets.UTF_8);
+  }
+
+  private static boolean isText(byte[] head, int from, boolean whole, Charset charset) {
     int cut = whole ? 0 : 4;
-    for (int drop = 0; drop <= cut && drop < head.length; drop++) {
-      CharsetDecoder decoder = StandardCharsets.UTF_8.newDecoder();
+    for (int drop = 0; drop <= cut && drop < head.length - from; drop++) {
+      CharsetDecoder decoder = charset.newDecoder();
       try {
-        decoder.decode(ByteBuffer.wrap(head, 0, head.length - drop));
+        decoder.decode(ByteBuffer.wrap(head, from, head.length - from - drop));
         return true;
       } catch (CharacterCodingException cutOrOther) {
         // the head may end within a character: once more with a byte less
       }
     }
-    return false;
+    return head.length == from;
   }
 
   private static char separator(List<String> lines) {

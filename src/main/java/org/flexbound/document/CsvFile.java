@@ -8,6 +8,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Locale;
 import org.apache.commons.io.input.ReaderInputStream;
 import org.flexbound.finding.Finding;
 import org.flexbound.finding.Findings;
@@ -82,6 +83,15 @@ public final class CsvFile implements SheetFile {
     try (InputStream in = Files.newInputStream(file)) {
       byte[] head = in.readNBytes(HEAD);
       CsvDialect dialect = CsvDialect.of(head, head.length < HEAD, layout);
+      if (layout.charset().isPresent() && !dialect.canDecode(head, head.length < HEAD)) {
+        findings.add(
+            DocumentFinding.UNREADABLE,
+            Where.file(shownName),
+            "found bytes that are not "
+                + dialect.charset().name().toLowerCase(Locale.ROOT)
+                + ", the encoding that is stated; another is windows-1252");
+        return Outcome.none(findings.list());
+      }
       if (layout.separator().isEmpty()
           || layout.decimalSign().isEmpty()
           || layout.charset().isEmpty()) {

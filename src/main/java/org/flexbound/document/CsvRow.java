@@ -137,7 +137,7 @@ final class CsvRow implements Row {
   public String text(int column) {
     return switch (kind(column)) {
       case BLANK -> "";
-      case NUMBER -> CellRow.shortest(numbers[column]);
+      case NUMBER -> DecimalText.shortest(numbers[column]);
       default ->
           isQuoted
               ? quoted[column]

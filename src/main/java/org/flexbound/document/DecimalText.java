@@ -108,4 +108,11 @@ final class DecimalText {
         Double.parseDouble(decimalSign == '.' ? text : text.replace((char) decimalSign, '.'));
     return Double.isInfinite(value) ? Double.NaN : value;
   }
+
+  /** The shortest decimal text that reads back to the same number; whole numbers without a point. */
+  static String shortest(double value) {
+    return value == Math.rint(value) && Math.abs(value) < 1e15
+        ? String.valueOf((long) value)
+        : String.valueOf(value);
+  }
 }

@@ -22,6 +22,11 @@ public enum DocumentFinding implements FindingKind {
       "DOC-LIMIT",
       "A file holds more than is read; the limit is named.",
       "Check that it is the right file; split it, or raise the limit named."),
+  /** A file that is named lies elsewhere. */
+  OUTSIDE_FOLDER(
+      "DOC-OUTSIDE-FOLDER",
+      "A file is named that does not lie in the folder of the file that names it.",
+      "Put it there, and name it relative to that folder."),
   /** JSON syntax. */
   JSON_SYNTAX("DOC-JSON-SYNTAX", "A JSON file breaks the rules of JSON.", "Mend the line named."),
   /** The same key twice in one object. */

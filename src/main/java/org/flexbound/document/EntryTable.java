@@ -1,6 +1,8 @@
 package org.flexbound.document;
 
+import java.math.BigDecimal;
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -8,10 +10,13 @@ import java.util.Map;
 import java.util.Optional;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
+import org.flexbound.quantity.NearestWord;
 
 /**
  * A small sheet of entries under a header row, held in memory: the columns are known by their names
- * (upper and lower case alike, in any order), and a unit may stand in the header in brackets.
+ * (upper and lower case alike, in any order), and a unit may stand in the header in brackets. A
+ * number that the sheet shows in percent comes as the text {@code 1 %}, since the number behind it
+ * (0.01) is not what its writer saw.
  *
  * <p>The header is the first row in which at least half of the required columns stand.
  */
@@ -115,6 +120,35 @@ public final class EntryTable {
   }
 
   /**
+   * A table that stands elsewhere than on a sheet: no header states a unit.
+   *
+   * @param where its place
+   * @param columns the known columns
+   * @param rows the cells of each row by column; a column that is left out is blank
+   * @param places the place of each row
+   * @return the table
+   */
+  public static EntryTable of(
+      Where where, List<String> columns, List<Map<String, Value>> rows, List<Where> places) {
+    Map<String, Header> headers = new LinkedHashMap<>();
+    List<Entry> entries = new ArrayList<>();
+    for (int r = 0; r < rows.size(); r++) {
+      Map<String, Value> values = new LinkedHashMap<>();
+      for (String column : columns) {
+        Value value = rows.get(r).get(column);
+        values.put(
+            column,
+            value == null ? new Value(CellKind.BLANK, "", Double.NaN, places.get(r)) : value);
+        if (value != null) {
+          headers.putIfAbsent(column, new Header(column, "", value.where()));
+        }
+      }
+      entries.add(new Entry(places.get(r), values));
+    }
+    return new EntryTable(where, Collections.unmodifiableMap(headers), entries);
+  }
+
+  /**
    * The place of the sheet.
    *
    * @return file and sheet
@@ -199,7 +233,11 @@ public final class EntryTable {
           findings.add(
               DocumentFinding.UNKNOWN_KEY,
               row.where(column),
-              "found the column '" + text + "'; expected one of " + String.join(", ", known));
+              "found the column '"
+                  + text
+                  + "'; expected one of "
+                  + String.join(", ", known)
+                  + NearestWord.question(nameAndUnit(text)[0], known));
         } else if (columns.containsKey(name.get())) {
           findings.add(
               DocumentFinding.WRONG_KIND,
@@ -229,10 +267,23 @@ public final class EntryTable {
             name,
             column == null
                 ? new Value(CellKind.BLANK, "", Double.NaN, row.where(0))
-                : new Value(
-                    row.kind(column), row.text(column), row.number(column), row.where(column)));
+                : value(row, column));
       }
       return new Entry(row.where(0), values);
+    }
+
+    /** A number shown in percent is what the user sees, so that 0.01 shown as 1 % reads "1 %". */
+    private static Value value(Row row, int column) {
+      if (row.kind(column) == CellKind.NUMBER && row.isPercent(column)) {
+        String shown =
+            new BigDecimal(Double.toString(row.number(column)))
+                .movePointRight(2)
+                .stripTrailingZeros()
+                .toPlainString();
+        return new Value(CellKind.TEXT, shown + " %", Double.NaN, row.where(column));
+      }
+      return new Value(
+          row.kind(column), row.text(column), row.number(column), row.where(column));
     }
 
     Optional<EntryTable> table() {

@@ -17,6 +17,23 @@ public sealed interface Json {
   Where where();
 
   /**
+   * The value as it is shown in a message.
+   *
+   * @return a text in quotes, a number, true or false; objects and lists by their kind
+   */
+  String shown();
+
+  /**
+   * A number in its shortest decimal form, whole numbers without a point.
+   *
+   * @param value the number
+   * @return the text
+   */
+  static String plain(double value) {
+    return DecimalText.shortest(value);
+  }
+
+  /**
    * An object; members keep the order of the file.
    *
    * @param where its place
@@ -37,6 +54,11 @@ public sealed interface Json {
     public Optional<Json> get(String name) {
       return Optional.ofNullable(members.get(name));
     }
+
+    @Override
+    public String shown() {
+      return "an object";
+    }
   }
 
   /**
@@ -50,6 +72,11 @@ public sealed interface Json {
     public Items {
       items = List.copyOf(items);
     }
+
+    @Override
+    public String shown() {
+      return "a list";
+    }
   }
 
   /**
@@ -58,7 +85,12 @@ public sealed interface Json {
    * @param where its place
    * @param text the text
    */
-  record Text(Where where, String text) implements Json {}
+  record Text(Where where, String text) implements Json {
+    @Override
+    public String shown() {
+      return "\"" + text + "\"";
+    }
+  }
 
   /**
    * A number.
@@ -66,7 +98,12 @@ public sealed interface Json {
    * @param where its place
    * @param value the value
    */
-  record Numeral(Where where, double value) implements Json {}
+  record Numeral(Where where, double value) implements Json {
+    @Override
+    public String shown() {
+      return plain(value);
+    }
+  }
 
   /**
    * A truth value.
@@ -74,12 +111,22 @@ public sealed interface Json {
    * @param where its place
    * @param value the value
    */
-  record Truth(Where where, boolean value) implements Json {}
+  record Truth(Where where, boolean value) implements Json {
+    @Override
+    public String shown() {
+      return String.valueOf(value);
+    }
+  }
 
   /**
    * The literal null.
    *
    * @param where its place
    */
-  record Nothing(Where where) implements Json {}
+  record Nothing(Where where) implements Json {
+    @Override
+    public String shown() {
+      return "null";
+    }
+  }
 }

@@ -34,30 +34,7 @@ final class Entries {
   }
 
   void wrong(Json value, String expected) {
-    add(FrameFinding.WRONG_KIND, value.where(), "found " + show(value) + "; expected " + expected);
-  }
-
-  static String show(Json value) {
-    if (value instanceof Json.Text text) {
-      return "\"" + text.text() + "\"";
-    }
-    if (value instanceof Json.Numeral number) {
-      return plain(number.value());
-    }
-    if (value instanceof Json.Truth truth) {
-      return String.valueOf(truth.value());
-    }
-    if (value instanceof Json.Members) {
-      return "an object";
-    }
-    return value instanceof Json.Items ? "a list" : "null";
-  }
-
-  /** The shortest text of a number, without ".0". */
-  static String plain(double value) {
-    return value == Math.rint(value) && Math.abs(value) < 1e15
-        ? String.valueOf((long) value)
-        : String.valueOf(value);
+    add(FrameFinding.WRONG_KIND, value.where(), "found " + value.shown() + "; expected " + expected);
   }
 
   void refuseOtherKeys(Json.Members members, String owner, Collection<String> known) {
@@ -161,7 +138,7 @@ final class Entries {
       name = text.text();
     } else if (value instanceof Json.Numeral number) {
       // Nodes are often called 1, 2, 3.
-      name = plain(number.value());
+      name = Json.plain(number.value());
     } else {
       wrong(value, "the name of one of the " + table + " for '" + key + "'");
       return Optional.empty();
@@ -215,7 +192,7 @@ final class Entries {
     add(
         FrameFinding.OUT_OF_RANGE,
         found.where(),
-        "found " + show(found) + " for '" + key + "'; expected more than 0");
+        "found " + found.shown() + " for '" + key + "'; expected more than 0");
     return OptionalDouble.empty();
   }
 
@@ -238,7 +215,7 @@ final class Entries {
         add(
             FrameFinding.WRONG_UNIT,
             value.where(),
-            "found " + show(value) + "; expected " + measure.words());
+            "found " + value.shown() + "; expected " + measure.words());
         return OptionalDouble.empty();
       }
       return finite(value, quantity.si());

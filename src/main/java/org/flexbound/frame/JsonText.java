@@ -52,7 +52,7 @@ final class JsonText {
       return quoted(t.text());
     }
     if (value instanceof Json.Numeral n) {
-      return Entries.plain(n.value());
+      return Json.plain(n.value());
     }
     if (value instanceof Json.Truth t) {
       return String.valueOf(t.value());

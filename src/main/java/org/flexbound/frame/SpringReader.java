@@ -67,7 +67,7 @@ final class SpringReader {
       entries.add(
           FrameFinding.OUT_OF_RANGE,
           value.where(),
-          "found " + Entries.show(value) + "; a stiffness is not negative");
+          "found " + value.shown() + "; a stiffness is not negative");
       return Optional.empty();
     }
     return Optional.of(new Stiffness(number.getAsDouble()));
@@ -219,7 +219,7 @@ final class SpringReader {
       entries.add(
           FrameFinding.OUT_OF_RANGE,
           value.where(),
-          "found " + Entries.show(value) + "; a factor is more than 0");
+          "found " + value.shown() + "; a factor is more than 0");
       return Optional.empty();
     }
     return stiffness(value, measure, word)

@@ -1,9 +1,7 @@
 package org.flexbound.quantity;
 
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import javax.measure.IncommensurableException;
 import tech.units.indriya.AbstractUnit;
@@ -113,33 +111,6 @@ public final class Units {
 
   /** The spellings nearest to a piece that is not in the table, at most three. */
   static List<String> nearest(String piece) {
-    return Spellings.TABLE.keySet().stream()
-        .filter(known -> distance(known, piece) <= Math.max(1, piece.length() / 3))
-        .sorted(
-            Comparator.<String>comparingInt(known -> distance(known, piece))
-                .thenComparing(Comparator.naturalOrder()))
-        .limit(3)
-        .toList();
-  }
-
-  /** Levenshtein's distance, upper and lower case alike. */
-  private static int distance(String left, String right) {
-    String a = left.toLowerCase(Locale.ROOT);
-    String b = right.toLowerCase(Locale.ROOT);
-    int[] row = new int[b.length() + 1];
-    for (int j = 0; j <= b.length(); j++) {
-      row[j] = j;
-    }
-    for (int i = 1; i <= a.length(); i++) {
-      int diagonal = row[0];
-      row[0] = i;
-      for (int j = 1; j <= b.length(); j++) {
-        int above = row[j];
-        int change = diagonal + (a.charAt(i - 1) == b.charAt(j - 1) ? 0 : 1);
-        row[j] = Math.min(change, Math.min(above, row[j - 1]) + 1);
-        diagonal = above;
-      }
-    }
-    return row[b.length()];
+    return NearestWord.of(piece, Spellings.TABLE.keySet());
   }
 }

@@ -78,30 +78,6 @@ final class JsonEntries {
 
   void wrong(Json value, String expected) {
     findings.add(
-        StudyFinding.WRONG_KIND, value.where(), "found " + show(value) + "; expected " + expected);
-  }
-
-  /** A JSON value as it is shown in a message. */
-  static String show(Json value) {
-    if (value instanceof Json.Text text) {
-      return "\"" + text.text() + "\"";
-    }
-    if (value instanceof Json.Numeral numeral) {
-      return plain(numeral.value());
-    }
-    if (value instanceof Json.Truth truth) {
-      return String.valueOf(truth.value());
-    }
-    if (value instanceof Json.Members) {
-      return "an object";
-    }
-    return value instanceof Json.Items ? "a list" : "null";
-  }
-
-  /** A number without a useless ".0". */
-  static String plain(double value) {
-    return value == Math.rint(value) && Math.abs(value) < 1e15
-        ? String.valueOf((long) value)
-        : String.valueOf(value);
+        StudyFinding.WRONG_KIND, value.where(), "found " + value.shown() + "; expected " + expected);
   }
 }

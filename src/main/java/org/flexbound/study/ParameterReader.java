@@ -134,7 +134,7 @@ final class ParameterReader {
               StudyFinding.BAD_SCALE,
               item.where(),
               "found "
-                  + JsonEntries.show(item)
+                  + item.shown()
                   + "; expected joints, connections or supports with x, y, z, rx, ry or rz, members"
                   + " with EA, EIy, EIz, GJ, GAy or GAz, or materials with E");
         }

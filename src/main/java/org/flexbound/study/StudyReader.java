@@ -167,7 +167,7 @@ public final class StudyReader {
     findings.add(
         StudyFinding.WRONG_KIND,
         value.get().where(),
-        "found " + JsonEntries.show(value.get()) + "; expected \"full\" or {\"modes\": 6}");
+        "found " + value.get().shown() + "; expected \"full\" or {\"modes\": 6}");
     return new FlexibilityChoice.Full();
   }
 
@@ -216,7 +216,7 @@ public final class StudyReader {
         StudyFinding.WRONG_KIND,
         value.get().where(),
         "found "
-            + JsonEntries.show(value.get())
+            + value.get().shown()
             + "; expected \"prior\", \"discrepancy\", \"curve-corner\" or a weight above 0");
     return new Rule.Prior();
   }
@@ -242,7 +242,7 @@ public final class StudyReader {
             StudyFinding.WRONG_KIND,
             item.where(),
             "found "
-                + JsonEntries.show(item)
+                + item.shown()
                 + "; expected the name of a load, or {\"configuration\": …, \"load\": …}");
       }
     }
@@ -259,7 +259,7 @@ public final class StudyReader {
           StudyFinding.WRONG_KIND,
           study.get("starts").orElse(study).where(),
           "found "
-              + JsonEntries.plain(starts.getAsDouble())
+              + Json.plain(starts.getAsDouble())
               + " starts; expected a whole number from 1 to 100");
       return 1;
     }

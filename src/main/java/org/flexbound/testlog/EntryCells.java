@@ -4,14 +4,20 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
+import java.util.function.UnaryOperator;
 import java.util.regex.Pattern;
 import org.flexbound.document.CellKind;
 import org.flexbound.document.EntryTable;
 import org.flexbound.finding.Findings;
 import org.flexbound.quantity.Dimension;
+import org.flexbound.quantity.NearestWord;
+import org.flexbound.quantity.Quantity;
 import org.flexbound.quantity.Unit;
 import org.flexbound.quantity.UnitException;
 import org.flexbound.quantity.Units;
+import org.flexbound.setup.Direction;
+import org.flexbound.setup.DirectionText;
 
 /** Takes typed entries out of the cells of an entry sheet, with a finding for each that is wrong. */
 final class EntryCells {
@@ -46,28 +52,154 @@ final class EntryCells {
     return Optional.of(entry.get(column).text()).filter(text -> !text.isEmpty());
   }
 
-  /** A number, where one stands; numbers stored as text are taken where they can mean one thing. */
-  OptionalDouble number(EntryTable.Entry entry, String column) {
+  /**
+   * A number as a cell states it.
+   *
+   * @param value the number
+   * @param unit the unit written with it, as in {@code 0.5 %} or {@code 120 mm}
+   */
+  record Stated(double value, Optional<Unit> unit) {}
+
+  /** A number with the unit that stands with it, where there is one; what is none is a finding. */
+  Optional<Stated> stated(EntryTable.Entry entry, String column) {
     EntryTable.Value value = entry.get(column);
     if (value.isBlank()) {
-      return OptionalDouble.empty();
+      return Optional.empty();
     }
     if (value.kind() == CellKind.NUMBER) {
-      return OptionalDouble.of(value.number());
+      return Optional.of(new Stated(value.number(), Optional.empty()));
     }
-    OptionalDouble read = value.kind() == CellKind.TEXT ? numberIn(value.text()) : OptionalDouble.empty();
-    if (read.isPresent()) {
-      findings.add(
-          TestlogFinding.NUMBER_AS_TEXT,
-          value.where(),
-          "found the text '" + value.text() + "', read as " + read.getAsDouble());
-      return read;
+    if (value.kind() == CellKind.TEXT) {
+      OptionalDouble read = numberIn(value.text());
+      if (read.isPresent()) {
+        findings.add(
+            TestlogFinding.NUMBER_AS_TEXT,
+            value.where(),
+            "found the text '" + value.text() + "', read as " + read.getAsDouble());
+        return Optional.of(new Stated(read.getAsDouble(), Optional.empty()));
+      }
+      Optional<Quantity> quantity = quantity(value);
+      if (quantity.isPresent()) {
+        return Optional.of(new Stated(quantity.get().value(), Optional.of(quantity.get().unit())));
+      }
     }
     findings.add(
         TestlogFinding.NOT_A_NUMBER,
         value.where(),
         "found " + show(value.kind(), value.text()) + "; expected a number");
-    return OptionalDouble.empty();
+    return Optional.empty();
+  }
+
+  private static Optional<Quantity> quantity(EntryTable.Value value) {
+    try {
+      return Optional.of(Quantity.parse(value.text()));
+    } catch (UnitException none) {
+      return Optional.empty();
+    }
+  }
+
+  /**
+   * A pure number, where one stands; numbers stored as text are taken where they can mean one thing,
+   * and 50 % is 0.5.
+   */
+  OptionalDouble number(EntryTable.Entry entry, String column) {
+    Optional<Stated> stated = stated(entry, column);
+    return stated.isEmpty()
+        ? OptionalDouble.empty()
+        : inSi(entry.get(column), stated.get(), Optional.of(Unit.ONE), List.of(Dimension.NUMBER), "number");
+  }
+
+  /** A share that is not negative and whose number counts percent where no unit stands with it. */
+  OptionalDouble percent(EntryTable.Entry entry, String column) {
+    Optional<Stated> stated = stated(entry, column);
+    return stated.isEmpty()
+        ? OptionalDouble.empty()
+        : notNegative(
+            entry.get(column),
+            column,
+            inSi(
+                entry.get(column),
+                stated.get(),
+                Optional.of(Units.known("%")),
+                List.of(Dimension.NUMBER),
+                "share, such as %"));
+  }
+
+  /** A number in SI: in its own unit, or in that of its column's header, or in the fallback. */
+  OptionalDouble si(
+      EntryTable table,
+      EntryTable.Entry entry,
+      String column,
+      Unit otherwise,
+      Dimension wanted,
+      String what) {
+    Optional<Stated> stated = stated(entry, column);
+    if (stated.isEmpty()) {
+      return OptionalDouble.empty();
+    }
+    Optional<Unit> unit =
+        stated.get().unit().isPresent()
+            ? Optional.empty()
+            : Optional.of(headerUnit(table, column, otherwise, wanted, what));
+    return inSi(entry.get(column), stated.get(), unit, List.of(wanted), what);
+  }
+
+  /** A number in SI: in its own unit, or in that of its row. */
+  OptionalDouble si(
+      EntryTable.Entry entry,
+      String column,
+      Optional<Unit> ofRow,
+      List<Dimension> wanted,
+      UnaryOperator<Unit> meaning) {
+    Optional<Stated> stated = stated(entry, column);
+    if (stated.isEmpty()) {
+      return OptionalDouble.empty();
+    }
+    if (stated.get().unit().isEmpty() && ofRow.isEmpty()) {
+      if (entry.get("Unit").isBlank()) {
+        findings.add(
+            TestlogFinding.NO_UNIT,
+            entry.get(column).where(),
+            "found "
+                + entry.get(column).text()
+                + " for "
+                + column
+                + " without a unit; expected one beside it, or with the number");
+      }
+      return OptionalDouble.empty();
+    }
+    return inSi(
+        entry.get(column), stated.get(), ofRow, wanted, "what stands beside it", meaning);
+  }
+
+  private OptionalDouble inSi(
+      EntryTable.Value value,
+      Stated stated,
+      Optional<Unit> otherwise,
+      List<Dimension> wanted,
+      String what) {
+    return inSi(value, stated, otherwise, wanted, what, UnaryOperator.identity());
+  }
+
+  private OptionalDouble inSi(
+      EntryTable.Value value,
+      Stated stated,
+      Optional<Unit> otherwise,
+      List<Dimension> wanted,
+      String what,
+      UnaryOperator<Unit> meaning) {
+    if (stated.unit().isPresent()
+        && wanted.stream().noneMatch(stated.unit().get().dimension()::fits)) {
+      findings.add(
+          TestlogFinding.UNIT,
+          value.where(),
+          "found '" + value.text() + "'; expected a number or a unit of " + what);
+      return OptionalDouble.empty();
+    }
+    Optional<Unit> unit = stated.unit().map(meaning).or(() -> otherwise);
+    return unit.isEmpty()
+        ? OptionalDouble.empty()
+        : OptionalDouble.of(unit.get().toSi(stated.value()));
   }
 
   /** The number a text states, if it can mean only one. */
@@ -91,17 +223,54 @@ final class EntryCells {
     };
   }
 
-  /** A number that is not negative, where one stands. */
-  OptionalDouble notNegative(EntryTable.Entry entry, String column) {
+  /** The number of a row, from 1, where one stands. */
+  OptionalInt row(EntryTable.Entry entry, String column) {
     OptionalDouble number = number(entry, column);
-    if (number.isPresent() && !(number.getAsDouble() >= 0)) {
+    if (number.isEmpty()) {
+      return OptionalInt.empty();
+    }
+    double value = number.getAsDouble();
+    if (!(value >= 1 && value <= Integer.MAX_VALUE && value == Math.rint(value))) {
       findings.add(
           TestlogFinding.OUT_OF_RANGE,
           entry.get(column).where(),
-          "found " + number.getAsDouble() + "; expected " + column + " of at least 0");
+          "found '" + entry.get(column).text() + "'; expected the number of a row, from 1");
+      return OptionalInt.empty();
+    }
+    return OptionalInt.of((int) value);
+  }
+
+  /** A pure number that is not negative, where one stands. */
+  OptionalDouble notNegative(EntryTable.Entry entry, String column) {
+    return notNegative(entry.get(column), column, number(entry, column));
+  }
+
+  /** The same number, where it is not negative. */
+  OptionalDouble notNegative(EntryTable.Value value, String column, OptionalDouble number) {
+    if (number.isPresent() && !(number.getAsDouble() >= 0)) {
+      findings.add(
+          TestlogFinding.OUT_OF_RANGE,
+          value.where(),
+          "found '" + value.text() + "'; expected " + column + " of at least 0");
       return OptionalDouble.empty();
     }
     return number;
+  }
+
+  /** The direction in the column Direction, where one stands; a wrong one is a finding. */
+  Optional<Direction> direction(EntryTable.Entry entry) {
+    EntryTable.Value value = entry.get("Direction");
+    if (value.isBlank()) {
+      return Optional.empty();
+    }
+    Optional<Direction> direction = DirectionText.parse(value.text());
+    if (direction.isEmpty()) {
+      findings.add(
+          TestlogFinding.DIRECTION,
+          value.where(),
+          "found '" + value.text() + "'; expected one such as " + DirectionText.EXPECTED);
+    }
+    return direction;
   }
 
   /** One of the words offered, by its position; blank is the default. */
@@ -119,7 +288,11 @@ final class EntryCells {
     findings.add(
         TestlogFinding.CHOICE,
         value.where(),
-        "found '" + value.text() + "'; expected " + String.join(", ", words));
+        "found '"
+            + value.text()
+            + "'; expected "
+            + String.join(", ", words)
+            + NearestWord.question(value.text(), words));
     return otherwise;
   }
 

@@ -6,40 +6,51 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.UnaryOperator;
 import org.flexbound.document.EntryTable;
-import org.flexbound.document.SheetFile;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.Dimension;
+import org.flexbound.quantity.NearestWord;
 import org.flexbound.quantity.Unit;
 import org.flexbound.setup.Instrument;
 
-/** Reads the sheets Test and Instruments, and hands out the tables of the others. */
+/** Reads the tables Test and Instruments, and hands out the others. */
 final class EntrySheets {
-  private final SheetFile file;
+  /** What an instrument may read. */
+  private static final List<Dimension> READ =
+      List.of(
+          Dimension.FORCE,
+          Dimension.MOMENT,
+          Dimension.MASS,
+          Dimension.LENGTH,
+          Dimension.ANGLE,
+          Dimension.NUMBER);
+
+  private final LogTables tables;
   private final Findings findings;
   private final EntryCells cells;
+  private final Optional<EntryTable> test;
 
-  EntrySheets(SheetFile file, Findings findings) {
-    this.file = file;
+  EntrySheets(LogTables tables, Findings findings) {
+    this.tables = tables;
     this.findings = findings;
     this.cells = new EntryCells(findings);
+    this.test = tables.table(SheetLayout.TEST);
   }
 
-  /** The table of a sheet, if the workbook has it. */
+  /** A table, if the log has it. */
   Optional<EntryTable> table(SheetLayout layout) {
-    return file.sheet(layout.name())
-        .flatMap(
-            sheet -> EntryTable.read(sheet, layout.required(), layout.optional(), findings));
+    return tables.table(layout);
   }
 
-  /** The table of a sheet that must be there and hold something. */
+  /** A table that must be there and hold something. */
   Optional<EntryTable> need(SheetLayout layout) {
-    if (file.sheet(layout.name()).isEmpty()) {
+    if (!tables.has(layout)) {
       findings.add(
           TestlogFinding.MISSING_SHEET,
-          Where.file(file.name()),
-          "found no sheet '" + layout.name() + "'; expected it: " + layout.help());
+          tables.where(layout),
+          "found no " + tables.name(layout) + "; expected it: " + layout.help());
       return Optional.empty();
     }
     Optional<EntryTable> table = table(layout);
@@ -47,15 +58,14 @@ final class EntrySheets {
       findings.add(
           TestlogFinding.EMPTY_SHEET,
           table.get().where(),
-          "found nothing below the header; expected at least one row: " + layout.help());
+          "found no row; expected at least one: " + layout.help());
     }
     return table;
   }
 
   TestInformation information() {
     Map<String, String> entries = new LinkedHashMap<>();
-    table(SheetLayout.TEST)
-        .ifPresent(
+    test.ifPresent(
             table ->
                 table
                     .entries()
@@ -73,7 +83,8 @@ final class EntrySheets {
                                 "found '"
                                     + item
                                     + "'; expected one of "
-                                    + String.join(", ", SheetLayout.TEST_ITEMS));
+                                    + String.join(", ", SheetLayout.TEST_ITEMS)
+                                    + NearestWord.question(item, SheetLayout.TEST_ITEMS));
                           } else {
                             entries.put(known.get(), EntryCells.text(entry, "Entry"));
                           }
@@ -89,17 +100,9 @@ final class EntrySheets {
         entries.getOrDefault("Notes", ""));
   }
 
-  /** The length unit of the sheet Test; metres where none is stated. */
+  /** The length unit of the table Test; metres where none is stated. */
   Unit lengthUnit() {
-    Optional<EntryTable> table = file.sheet("Test")
-        .flatMap(
-            sheet ->
-                EntryTable.read(
-                    sheet,
-                    SheetLayout.TEST.required(),
-                    SheetLayout.TEST.optional(),
-                    new Findings()));
-    return table.stream()
+    return test.stream()
         .flatMap(found -> found.entries().stream())
         .filter(entry -> EntryCells.text(entry, "Item").equalsIgnoreCase("Length unit"))
         .filter(entry -> !entry.get("Entry").isBlank())
@@ -145,13 +148,7 @@ final class EntrySheets {
     Optional<Unit> unit =
         cells.unit(
             entry.get("Unit"),
-            List.of(
-                Dimension.FORCE,
-                Dimension.MOMENT,
-                Dimension.MASS,
-                Dimension.LENGTH,
-                Dimension.ANGLE,
-                Dimension.NUMBER),
+            READ,
             "what the instrument reads");
     int statedAs =
         cells.choice(
@@ -163,7 +160,7 @@ final class EntrySheets {
           // limits without a distribution: rectangular (JCGM 100:2008, 4.3.7)
           default -> Math.sqrt(3);
         };
-    OptionalDouble share = cells.notNegative(entry, "Uncertainty of reading (%)");
+    OptionalDouble share = cells.percent(entry, "Uncertainty of reading (%)");
     OptionalDouble fixed = si(entry, "Uncertainty fixed", unit);
     if (share.isEmpty() && fixed.isEmpty()) {
       findings.add(
@@ -178,7 +175,7 @@ final class EntrySheets {
         EntryCells.text(entry, "Calibration reference"),
         day(EntryCells.text(entry, "Calibration date")),
         share.isPresent()
-            ? OptionalDouble.of(share.getAsDouble() / 100 / divisor)
+            ? OptionalDouble.of(share.getAsDouble() / divisor)
             : OptionalDouble.empty(),
         fixed.isPresent()
             ? OptionalDouble.of(fixed.getAsDouble() / divisor)
@@ -189,19 +186,9 @@ final class EntrySheets {
   }
 
   private OptionalDouble si(EntryTable.Entry entry, String column, Optional<Unit> unit) {
-    OptionalDouble number = cells.notNegative(entry, column);
-    if (number.isEmpty()) {
-      return number;
-    }
-    if (unit.isEmpty()) {
-      if (entry.get("Unit").isBlank()) {
-        findings.add(
-            TestlogFinding.NO_UNIT,
-            entry.get(column).where(),
-            "found " + number.getAsDouble() + " without a unit; expected one in the column Unit");
-      }
-      return OptionalDouble.empty();
-    }
-    return OptionalDouble.of(unit.get().toSi(number.getAsDouble()));
+    return cells.notNegative(
+        entry.get(column),
+        column,
+        cells.si(entry, column, unit, READ, UnaryOperator.identity()));
   }
 }

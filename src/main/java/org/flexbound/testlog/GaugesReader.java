@@ -103,10 +103,7 @@ final class GaugesReader {
     if (column.isEmpty() || station.isEmpty() || direction.isEmpty()) {
       return Optional.empty();
     }
-    Optional<String> instrument = EntryCells.name(entry, "Instrument");
-    Where unitCell =
-        entry.get("Unit").isBlank() ? entry.get("Column").where() : entry.get("Unit").where();
-    claims.add(new Claim(name, false, column.get(), unit, instrument, unitCell));
+    claims.add(Claim.of(entry, name, false, column.get(), unit));
     return Optional.of(
         new Gauge(
             name,
@@ -119,7 +116,7 @@ final class GaugesReader {
             part(entry, "Measures", Part.ARTICLE),
             part(entry, "Stands on", Part.GROUND),
             cells.yes(entry, "Base", false),
-            instrument,
+            EntryCells.name(entry, "Instrument"),
             places.placing(entry),
             EntryCells.text(entry, "Remark"),
             entry.get("Gauge").where()));

@@ -4,14 +4,13 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.UnaryOperator;
 import org.flexbound.document.EntryTable;
 import org.flexbound.finding.Findings;
 import org.flexbound.quantity.Dimension;
 import org.flexbound.quantity.Unit;
 import org.flexbound.quantity.UnitException;
 import org.flexbound.quantity.Units;
-import org.flexbound.setup.Direction;
-import org.flexbound.setup.DirectionText;
 import org.flexbound.setup.LimitKind;
 import org.flexbound.setup.LimitSpec;
 
@@ -36,9 +35,7 @@ final class LimitsReader {
       }
       LimitKind kind = List.of(LimitKind.values()).get(cells.choice(entry, "On", kinds, 0));
       Optional<Unit> unit = unit(entry, kind);
-      OptionalDouble lower = cells.number(entry, "Lower");
-      OptionalDouble upper = cells.number(entry, "Upper");
-      if (lower.isEmpty() && upper.isEmpty()) {
+      if (entry.get("Lower").isBlank() && entry.get("Upper").isBlank()) {
         findings.add(
             TestlogFinding.MISSING_ENTRY,
             entry.get("Upper").where(),
@@ -54,32 +51,18 @@ final class LimitsReader {
                       EntryCells.name(entry, "Gauge"),
                       EntryCells.name(entry, "Load"),
                       EntryCells.name(entry, "Node"),
-                      direction(entry),
-                      si(lower, found),
-                      si(upper, found),
+                      cells.direction(entry),
+                      value(entry, "Lower", found),
+                      value(entry, "Upper", found),
                       found,
                       entry.get("Limit").where())));
     }
     return limits;
   }
 
-  private static OptionalDouble si(OptionalDouble value, Unit unit) {
-    return value.isPresent() ? OptionalDouble.of(unit.toSi(value.getAsDouble())) : value;
-  }
-
-  private Optional<Direction> direction(EntryTable.Entry entry) {
-    EntryTable.Value value = entry.get("Direction");
-    if (value.isBlank()) {
-      return Optional.empty();
-    }
-    Optional<Direction> direction = DirectionText.parse(value.text());
-    if (direction.isEmpty()) {
-      findings.add(
-          TestlogFinding.DIRECTION,
-          value.where(),
-          "found '" + value.text() + "'; expected one such as " + DirectionText.EXPECTED);
-    }
-    return direction;
+  private OptionalDouble value(EntryTable.Entry entry, String column, Unit unit) {
+    return cells.si(
+        entry, column, Optional.of(unit), List.of(unit.dimension()), UnaryOperator.identity());
   }
 
   /** A unit of motion per load, of load per motion, or a share, by the kind of limit. */

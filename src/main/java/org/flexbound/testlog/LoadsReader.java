@@ -88,19 +88,22 @@ final class LoadsReader {
                 PlacesReader.loadDimensions(moment),
                 moment ? "moment" : "force (or mass, for dead weights)")
             .map(found -> weight(found, gravity));
-    OptionalDouble limit = cells.notNegative(first, "Limit");
-    if (limit.isPresent() && unit.isPresent()) {
-      limit = OptionalDouble.of(unit.get().toSi(limit.getAsDouble()));
-    }
-    Optional<String> instrument = EntryCells.name(first, "Instrument");
-    Where unitCell =
-        first.get("Unit").isBlank() ? first.get("Column").where() : first.get("Unit").where();
-    claims.add(new Claim(name, true, column.get(), unit, instrument, unitCell));
+    OptionalDouble limit =
+        cells.notNegative(
+            first.get("Limit"),
+            "Limit",
+            cells.si(
+                first,
+                "Limit",
+                unit,
+                PlacesReader.loadDimensions(moment),
+                stated -> weight(stated, gravity)));
+    claims.add(Claim.of(first, name, true, column.get(), unit));
     return Optional.of(
         new Load(
             name,
             points,
-            instrument,
+            EntryCells.name(first, "Instrument"),
             limit,
             EntryCells.text(first, "Remark"),
             first.get("Load").where()));

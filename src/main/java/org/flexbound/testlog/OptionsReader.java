@@ -6,9 +6,11 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.UnaryOperator;
 import org.flexbound.document.EntryTable;
 import org.flexbound.finding.Findings;
 import org.flexbound.quantity.Dimension;
+import org.flexbound.quantity.NearestWord;
 import org.flexbound.quantity.Unit;
 import org.flexbound.setup.BeddingIn;
 import org.flexbound.setup.DecisionRule;
@@ -21,6 +23,9 @@ import org.flexbound.setup.SlopeFit;
 final class OptionsReader {
   /** The items of the sheet, with what belongs in the entry; used by the template too. */
   static final Map<String, String> ITEMS = items();
+
+  /** The items that may be set for one gauge. */
+  static final List<String> OF_A_GAUGE = List.of("Fit range lower", "Fit range upper");
 
   private final EntryCells cells;
   private final Findings findings;
@@ -73,7 +78,8 @@ final class OptionsReader {
             "found '"
                 + EntryCells.text(entry, "Item")
                 + "'; expected one of "
-                + String.join(", ", ITEMS.keySet()));
+                + String.join(", ", ITEMS.keySet())
+                + NearestWord.question(EntryCells.text(entry, "Item"), ITEMS.keySet()));
       } else if (gauge.isEmpty()) {
         common.put(item.get(), entry);
       } else if (item.get().equals("Fit range lower")) {
@@ -120,7 +126,7 @@ final class OptionsReader {
             share(common, "Base motion limit", q.baseMotionShare()));
     EntryTable.Entry repeatability = common.get("Stated repeatability");
     return new ReductionOptions(
-        repeatability == null ? OptionalDouble.empty() : opt(percent(repeatability)),
+        repeatability == null ? OptionalDouble.empty() : percent(repeatability),
         range,
         byGauge,
         choice(common, "First cycle", List.of("leave out", "keep")) == 1
@@ -139,21 +145,19 @@ final class OptionsReader {
             .get(choice(common, "Decision rule", List.of("guard band", "simple"))));
   }
 
-  private static OptionalDouble opt(Optional<Double> value) {
-    return value.isPresent() ? OptionalDouble.of(value.get()) : OptionalDouble.empty();
-  }
-
   private double gravity(Map<String, EntryTable.Entry> common) {
     EntryTable.Entry entry = common.get("Local gravity");
     if (entry == null) {
       return ReductionOptions.STANDARD_GRAVITY;
     }
-    OptionalDouble value = cells.number(entry, "Entry");
+    Unit metric = new Unit("m/s²", Dimension.ACCELERATION, 1, 0);
+    List<Dimension> wanted = List.of(Dimension.ACCELERATION);
     Unit unit =
+        cells.unit(entry.get("Unit"), wanted, "acceleration, such as m/s²").orElse(metric);
+    double si =
         cells
-            .unit(entry.get("Unit"), List.of(Dimension.ACCELERATION), "acceleration, such as m/s²")
-            .orElse(new Unit("m/s²", Dimension.ACCELERATION, 1, 0));
-    double si = unit.toSi(value.orElse(ReductionOptions.STANDARD_GRAVITY));
+            .si(entry, "Entry", Optional.of(unit), wanted, UnaryOperator.identity())
+            .orElse(ReductionOptions.STANDARD_GRAVITY);
     // on the Earth's surface gravity lies from 9.76 to 9.84 m/s²
     if (!(si > 9.7 && si < 9.9)) {
       findings.add(
@@ -191,9 +195,8 @@ final class OptionsReader {
     return entry == null ? OptionalDouble.empty() : cells.notNegative(entry, "Entry");
   }
 
-  private Optional<Double> percent(EntryTable.Entry entry) {
-    OptionalDouble number = cells.notNegative(entry, "Entry");
-    return number.isPresent() ? Optional.of(number.getAsDouble() / 100) : Optional.empty();
+  private OptionalDouble percent(EntryTable.Entry entry) {
+    return cells.percent(entry, "Entry");
   }
 
   private int choice(Map<String, EntryTable.Entry> common, String item, List<String> words) {

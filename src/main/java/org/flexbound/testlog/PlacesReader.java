@@ -1,6 +1,5 @@
 package org.flexbound.testlog;
 
-import java.util.Locale;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -41,12 +40,7 @@ final class PlacesReader {
   }
 
   private OptionalDouble coordinate(EntryTable.Entry entry, String column) {
-    OptionalDouble number = cells.number(entry, column);
-    if (number.isEmpty()) {
-      return number;
-    }
-    Unit unit = cells.headerUnit(table, column, length, Dimension.LENGTH, "length");
-    return OptionalDouble.of(unit.toSi(number.getAsDouble()));
+    return cells.si(table, entry, column, length, Dimension.LENGTH, "length");
   }
 
   /** A node, or {@code member @ share}; empty where the cell is blank. */
@@ -80,31 +74,22 @@ final class PlacesReader {
           "found no direction; expected one such as " + DirectionText.EXPECTED);
       return Optional.empty();
     }
-    Optional<Direction> direction = DirectionText.parse(value.text());
-    if (direction.isEmpty()) {
-      findings.add(
-          TestlogFinding.DIRECTION,
-          value.where(),
-          "found '" + value.text() + "'; expected one such as " + DirectionText.EXPECTED);
-    }
-    return direction;
+    return cells.direction(entry);
   }
 
   /** How well the place and the line are known. */
   Placing placing(EntryTable.Entry entry) {
-    OptionalDouble position = cells.notNegative(entry, "Position uncertainty");
-    OptionalDouble angle = cells.notNegative(entry, "Angle uncertainty");
-    if (position.isPresent()) {
-      Unit unit =
-          cells.headerUnit(table, "Position uncertainty", length, Dimension.LENGTH, "length");
-      position = OptionalDouble.of(unit.toSi(position.getAsDouble()));
-    }
-    if (angle.isPresent()) {
-      Unit unit =
-          cells.headerUnit(table, "Angle uncertainty", degree(), Dimension.ANGLE, "angle");
-      angle = OptionalDouble.of(unit.toSi(angle.getAsDouble()));
-    }
+    OptionalDouble position =
+        uncertainty(entry, "Position uncertainty", length, Dimension.LENGTH, "length");
+    OptionalDouble angle =
+        uncertainty(entry, "Angle uncertainty", degree(), Dimension.ANGLE, "angle");
     return new Placing(position, angle);
+  }
+
+  private OptionalDouble uncertainty(
+      EntryTable.Entry entry, String column, Unit otherwise, Dimension wanted, String what) {
+    OptionalDouble si = cells.si(table, entry, column, otherwise, wanted, what);
+    return cells.notNegative(entry.get(column), column, si);
   }
 
   private static Unit degree() {
@@ -116,10 +101,5 @@ final class PlacesReader {
     return moment
         ? List.of(Dimension.MOMENT)
         : List.of(Dimension.FORCE, Dimension.MASS);
-  }
-
-  /** A word as it is compared. */
-  static String key(String text) {
-    return text.strip().toLowerCase(Locale.ROOT);
   }
 }

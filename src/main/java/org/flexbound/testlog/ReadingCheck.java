@@ -21,12 +21,13 @@ final class ReadingCheck {
    */
   static int check(Run run, ReadingsSheet sheet, int firstRow, int lastRow, Findings findings) {
     int[] rows = {0};
-    int use = sheet.column("Use").map(ReadingsSheet.HeaderCell::index).orElse(-1);
+    int use = sheet.extra("Use").map(ReadingsSheet.HeaderCell::index).orElse(-1);
     List<ReadingsSheet.HeaderCell> cells =
         java.util.stream.Stream.concat(run.loads().stream(), run.gauges().stream())
             .flatMap(channel -> sheet.column(channel.column()).stream())
             .toList();
-    Column[] columns = cells.stream().map(Column::new).toArray(Column[]::new);
+    Column[] columns =
+        cells.stream().map(cell -> new Column(cell, sheet.layout())).toArray(Column[]::new);
     sheet
         .sheet()
         .forEachRow(
@@ -52,18 +53,28 @@ final class ReadingCheck {
 
   private static final class Column {
     private final ReadingsSheet.HeaderCell header;
+    private final ReadingsLayout layout;
     private int bad;
+    private int missing;
+    private Where firstMissing = Where.nowhere();
     private int asText;
     private Where firstAsText = Where.nowhere();
 
-    Column(ReadingsSheet.HeaderCell header) {
+    Column(ReadingsSheet.HeaderCell header, ReadingsLayout layout) {
       this.header = header;
+      this.layout = layout;
     }
 
     boolean look(Row row, Findings findings) {
       int column = header.index();
       CellKind kind = row.kind(column);
       if (kind == CellKind.BLANK) {
+        return false;
+      }
+      if (layout.isNoReading(row, column)) {
+        if (missing++ == 0) {
+          firstMissing = row.where(column);
+        }
         return false;
       }
       if (kind == CellKind.NUMBER && Double.isFinite(row.number(column))) {
@@ -89,6 +100,16 @@ final class ReadingCheck {
     }
 
     void close(Findings findings) {
+      if (missing > 0) {
+        findings.add(
+            TestlogFinding.READINGS_MISSING,
+            firstMissing,
+            missing
+                + (missing == 1 ? " cell" : " cells")
+                + " of the column '"
+                + header.text()
+                + "', from here on, stand for a missing reading as the description says");
+      }
       if (bad > NAMED) {
         findings.add(
             TestlogFinding.NOT_A_NUMBER,

@@ -1,31 +1,23 @@
 package org.flexbound.testlog;
 
-import java.util.ArrayList;
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
-import org.flexbound.document.CellKind;
-import org.flexbound.document.EntryTable;
-import org.flexbound.document.Row;
 import org.flexbound.document.Sheet;
 import org.flexbound.finding.Where;
 
-/**
- * The header of a sheet of readings: the first row that names at least one load column and one gauge
- * column, and the units row that may follow it.
- */
+/** A sheet of readings whose header is known. */
 final class ReadingsSheet {
-  private final Sheet sheet;
+  private final ReadingsSource source;
   private final Map<String, HeaderCell> columns;
   private final int firstDataRow;
 
-  private ReadingsSheet(Sheet sheet, Map<String, HeaderCell> columns, int firstDataRow) {
-    this.sheet = sheet;
-    this.columns = columns;
-    this.firstDataRow = firstDataRow;
+  ReadingsSheet(ReadingsSource source, Map<String, HeaderCell> columns, int firstDataRow) {
+    this.source = source;
+    this.columns = Collections.unmodifiableMap(new LinkedHashMap<>(columns));
+    this.firstDataRow = Math.max(firstDataRow, source.layout().firstRow().orElse(1));
   }
 
   /**
@@ -37,10 +29,22 @@ final class ReadingsSheet {
    * @param where the header's cell
    * @param unitWhere the cell in which the unit stands
    */
-  record HeaderCell(String text, int index, String unit, Where where, Where unitWhere) {}
+  record HeaderCell(String text, int index, String unit, Where where, Where unitWhere) {
+    HeaderCell withUnit(String other, Where place) {
+      return new HeaderCell(text, index, other, where, place);
+    }
+  }
 
   Sheet sheet() {
-    return sheet;
+    return source.sheet();
+  }
+
+  ReadingsSource source() {
+    return source;
+  }
+
+  ReadingsLayout layout() {
+    return source.layout();
   }
 
   /** The first row below header and units. */
@@ -48,99 +52,23 @@ final class ReadingsSheet {
     return firstDataRow;
   }
 
+  /** The last row that may hold readings. */
+  int lastRow() {
+    return layout().lastRow().orElse(Integer.MAX_VALUE);
+  }
+
+  /** A column by its header, with or without its unit. */
   Optional<HeaderCell> column(String text) {
-    return Optional.ofNullable(columns.get(key(text)));
+    return Optional.ofNullable(columns.get(HeaderText.claimedKey(text)))
+        .or(() -> Optional.ofNullable(columns.get(HeaderText.key(text))));
+  }
+
+  /** One of the columns Time, Step, Use and Remark, under whatever header it has here. */
+  Optional<HeaderCell> extra(String word) {
+    return column(layout().extra(word));
   }
 
   List<HeaderCell> columns() {
     return List.copyOf(columns.values());
-  }
-
-  static String key(String text) {
-    return text.strip().toLowerCase(Locale.ROOT);
-  }
-
-  /** Finds the header; empty where the sheet has none. */
-  static Optional<ReadingsSheet> find(Sheet sheet, Set<String> loadColumns, Set<String> gaugeColumns) {
-    Finder finder = new Finder(loadColumns, gaugeColumns);
-    sheet.forEachRow(finder::visit);
-    if (finder.header.isEmpty()) {
-      return Optional.empty();
-    }
-    return Optional.of(
-        new ReadingsSheet(sheet, finder.header, finder.firstDataRow));
-  }
-
-  private static final class Finder {
-    private final Set<String> loads;
-    private final Set<String> gauges;
-    private Map<String, HeaderCell> header = new LinkedHashMap<>();
-    private int firstDataRow;
-    private int rowsSeen;
-
-    Finder(Set<String> loads, Set<String> gauges) {
-      this.loads = loads;
-      this.gauges = gauges;
-    }
-
-    boolean visit(Row row) {
-      if (!header.isEmpty()) {
-        unitsRow(row);
-        return false;
-      }
-      boolean load = false;
-      boolean gauge = false;
-      List<HeaderCell> cells = new ArrayList<>();
-      for (int column = 0; column < row.width(); column++) {
-        if (row.kind(column) != CellKind.TEXT) {
-          continue;
-        }
-        String[] parts = EntryTable.nameAndUnit(row.text(column));
-        load |= loads.contains(key(parts[0]));
-        gauge |= gauges.contains(key(parts[0]));
-        cells.add(
-            new HeaderCell(parts[0], column, parts[1], row.where(column), row.where(column)));
-      }
-      if (load && gauge) {
-        cells.forEach(cell -> header.putIfAbsent(key(cell.text()), cell));
-        firstDataRow = row.number() + 1;
-      }
-      return ++rowsSeen < 200;
-    }
-
-    /** A row right under the header with texts and no numbers states units. */
-    private void unitsRow(Row row) {
-      boolean texts = false;
-      for (HeaderCell cell : header.values()) {
-        if (!loads.contains(key(cell.text())) && !gauges.contains(key(cell.text()))) {
-          continue;
-        }
-        if (row.kind(cell.index()) == CellKind.NUMBER
-            || EntryCells.numberIn(row.text(cell.index())).isPresent()) {
-          return;
-        }
-        texts |= row.kind(cell.index()) == CellKind.TEXT;
-      }
-      if (!texts) {
-        return;
-      }
-      Map<String, HeaderCell> withUnits = new LinkedHashMap<>();
-      header.forEach(
-          (key, cell) -> {
-            String unit = row.text(cell.index());
-            String bare =
-                unit.startsWith("[") && unit.endsWith("]")
-                    ? unit.substring(1, unit.length() - 1).strip()
-                    : unit;
-            withUnits.put(
-                key,
-                bare.isEmpty()
-                    ? cell
-                    : new HeaderCell(
-                        cell.text(), cell.index(), bare, cell.where(), row.where(cell.index())));
-          });
-      header = withUnits;
-      firstDataRow = row.number() + 1;
-    }
   }
 }

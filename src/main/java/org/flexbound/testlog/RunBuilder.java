@@ -11,6 +11,7 @@ import java.util.stream.Collectors;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.Dimension;
+import org.flexbound.quantity.NearestWord;
 import org.flexbound.quantity.Unit;
 
 /** Makes a run of a readings sheet: settles what each column means and in which unit. */
@@ -39,22 +40,22 @@ final class RunBuilder {
     boolean sound = meanings(run, sheet, byColumn);
     List<Settled> settled = new ArrayList<>();
     Set<String> extras =
-        SheetLayout.READING_COLUMNS.stream().map(ReadingsSheet::key).collect(Collectors.toSet());
+        SheetLayout.READING_COLUMNS.stream()
+            .map(word -> HeaderText.claimedKey(sheet.layout().extra(word)))
+            .collect(Collectors.toSet());
+    List<ReadingsSheet.HeaderCell> idle = new ArrayList<>();
     for (ReadingsSheet.HeaderCell cell : sheet.columns()) {
-      String key = ReadingsSheet.key(cell.text());
+      String key = HeaderText.key(cell.text());
       Claim claim = byColumn.get(key);
       if (claim != null) {
-        Optional<Unit> unit = unit(claim, cell);
+        Optional<Unit> unit = unit(claim, cell, sheet.layout());
         sound &= unit.isPresent();
         unit.ifPresent(found -> settled.add(new Settled(claim, cell, found)));
       } else if (!extras.contains(key)) {
-        findings.add(
-            TestlogFinding.COLUMN_NOT_USED,
-            cell.where(),
-            "the column '" + cell.text() + "' is neither a load nor a gauge in run '"
-                + run.name() + "'");
+        idle.add(cell);
       }
     }
+    noteIdle(run, idle);
     List<Settled> loads = settled.stream().filter(s -> s.claim().isLoad()).toList();
     List<Settled> gauges = settled.stream().filter(s -> !s.claim().isLoad()).toList();
     if (sound && loads.isEmpty()) {
@@ -71,12 +72,13 @@ final class RunBuilder {
         new SheetReadings(
             sheet.sheet(),
             Math.max(run.firstRow(), sheet.firstDataRow()),
-            run.lastRow(),
+            Math.min(run.lastRow(), sheet.lastRow()),
             loads.stream().mapToInt(s -> s.cell().index()).toArray(),
             loads.stream().map(Settled::unit).toArray(Unit[]::new),
             gauges.stream().mapToInt(s -> s.cell().index()).toArray(),
             gauges.stream().map(Settled::unit).toArray(Unit[]::new),
-            extras(sheet));
+            extras(sheet),
+            sheet.layout());
     return Optional.of(
         new Run(
             run.name(),
@@ -88,6 +90,20 @@ final class RunBuilder {
             gauges.stream().map(Settled::channel).toList(),
             readings,
             sheet.sheet().where()));
+  }
+
+  private void noteIdle(RunRows.RunRow run, List<ReadingsSheet.HeaderCell> idle) {
+    if (!idle.isEmpty()) {
+      findings.add(
+          TestlogFinding.COLUMN_NOT_USED,
+          idle.get(0).where(),
+          (idle.size() == 1 ? "the column " : "the columns ")
+              + idle.stream().map(cell -> "'" + cell.text() + "'").collect(Collectors.joining(", "))
+              + (idle.size() == 1 ? " is" : " are")
+              + " neither a load nor a gauge in run '"
+              + run.name()
+              + "'");
+    }
   }
 
   /** Which load or gauge each column reads in this run; false where that cannot be settled. */
@@ -102,7 +118,11 @@ final class RunBuilder {
         findings.add(
             TestlogFinding.UNKNOWN_NAME,
             meaning.where(),
-            "found '" + meaning.name() + "'; expected a name of the sheets Load points or Gauges");
+            "found '"
+                + meaning.name()
+                + "'; expected the name of a load point or of a gauge"
+                + NearestWord.question(
+                    meaning.name(), claims.stream().map(Claim::name).toList()));
         sound = false;
       } else if (sheet.column(entry.getKey()).isEmpty()) {
         findings.add(
@@ -114,7 +134,8 @@ final class RunBuilder {
                 + meaning.where()
                 + " names for run '"
                 + run.name()
-                + "'");
+                + "'"
+                + nearest(meaning.column(), sheet));
         sound = false;
       } else {
         byColumn.put(entry.getKey(), claim.get());
@@ -124,7 +145,7 @@ final class RunBuilder {
         claims.stream()
             .collect(
                 Collectors.groupingBy(
-                    claim -> ReadingsSheet.key(claim.column()),
+                    claim -> claim.key(),
                     LinkedHashMap::new,
                     Collectors.toList()));
     for (Map.Entry<String, List<Claim>> entry : standing.entrySet()) {
@@ -145,7 +166,8 @@ final class RunBuilder {
                   + "'; expected it for the gauge '"
                   + first.name()
                   + "' of "
-                  + first.where());
+                  + first.where()
+                  + nearest(first.column(), sheet));
           sound = false;
         }
       } else if (claimants.size() > 1) {
@@ -167,50 +189,94 @@ final class RunBuilder {
     return sound;
   }
 
-  private Optional<Unit> unit(Claim claim, ReadingsSheet.HeaderCell cell) {
-    if (cell.unit().isEmpty()) {
-      if (claim.unit().isEmpty()) {
-        findings.add(
-            TestlogFinding.NO_UNIT,
-            cell.where(),
-            "found no unit for the column '" + cell.text() + "', nor at " + claim.where());
+  private static String nearest(String column, ReadingsSheet sheet) {
+    return NearestWord.question(
+        column, sheet.columns().stream().map(ReadingsSheet.HeaderCell::text).toList());
+  }
+
+  /**
+   * The unit of a column, in which its scale is included: that of the claim, of the layout and of
+   * the sheet, where all that state one must agree. The sheet's unit is that of the numbers before
+   * they are scaled, and says nothing about what they are afterwards.
+   */
+  private Optional<Unit> unit(
+      Claim claim, ReadingsSheet.HeaderCell cell, ReadingsLayout layout) {
+    Optional<ReadingsLayout.StatedColumn> stated =
+        Optional.ofNullable(layout.columns().get(HeaderText.key(cell.text())));
+    double scale = stated.map(ReadingsLayout.StatedColumn::scale).orElse(1.0);
+    List<Statement> statements = new ArrayList<>();
+    claim.unit().ifPresent(unit -> statements.add(new Statement(unit, claim.where())));
+    stated
+        .flatMap(ReadingsLayout.StatedColumn::unit)
+        .ifPresent(unit -> statements.add(new Statement(meant(claim, unit), stated.get().where())));
+    if (!cell.unit().isEmpty() && scale == 1) {
+      Optional<Unit> own =
+          cells.unit(
+              cell.unit(), cell.unitWhere(), dimensions(claim), claim.isLoad() ? "force" : "motion");
+      if (own.isEmpty()) {
+        return Optional.empty();
       }
-      return claim.unit();
+      statements.add(new Statement(meant(claim, own.get()), cell.unitWhere()));
     }
-    List<Dimension> wanted =
-        claim.isLoad()
-            ? List.of(Dimension.FORCE, Dimension.MASS, Dimension.MOMENT)
-            : List.of(Dimension.LENGTH, Dimension.ANGLE, Dimension.NUMBER);
-    Optional<Unit> unit =
-        cells
-            .unit(cell.unit(), cell.unitWhere(), wanted, claim.isLoad() ? "force" : "motion")
-            .map(found -> claim.isLoad() ? LoadsReader.weight(found, gravity) : found);
-    if (unit.isPresent()
-        && claim.unit().isPresent()
-        && (unit.get().siFactor() != claim.unit().get().siFactor()
-            || !unit.get().dimension().equals(claim.unit().get().dimension()))) {
+    if (statements.isEmpty()) {
       findings.add(
-          TestlogFinding.UNITS_DISAGREE,
-          cell.unitWhere(),
-          "found '"
-              + cell.unit()
-              + "' here but '"
-              + claim.unit().get().symbol()
-              + "' at "
-              + claim.where()
-              + " for '"
-              + claim.name()
-              + "'; expected one unit");
+          TestlogFinding.NO_UNIT,
+          cell.where(),
+          "found no unit for "
+              + (scale == 1 ? "" : "the scaled numbers of ")
+              + "the column '"
+              + cell.text()
+              + "', nor at "
+              + claim.where());
       return Optional.empty();
     }
-    return unit;
+    Statement last = statements.get(statements.size() - 1);
+    for (Statement other : statements) {
+      if (!same(other.unit(), last.unit())) {
+        findings.add(
+            TestlogFinding.UNITS_DISAGREE,
+            last.where(),
+            "found '"
+                + last.unit().symbol()
+                + "' here but '"
+                + other.unit().symbol()
+                + "' at "
+                + other.where()
+                + " for '"
+                + claim.name()
+                + "'; expected one unit");
+        return Optional.empty();
+      }
+    }
+    Unit unit = last.unit();
+    return Optional.of(
+        scale == 1
+            ? unit
+            : new Unit(unit.symbol(), unit.dimension(), unit.siFactor() * scale, unit.siOffset()));
+  }
+
+  /** A unit and the place that states it. */
+  private record Statement(Unit unit, Where where) {}
+
+  private static boolean same(Unit one, Unit other) {
+    return one.siFactor() == other.siFactor() && one.dimension().equals(other.dimension());
+  }
+
+  private Unit meant(Claim claim, Unit unit) {
+    return claim.isLoad() ? LoadsReader.weight(unit, gravity) : unit;
+  }
+
+  private static List<Dimension> dimensions(Claim claim) {
+    return claim.isLoad()
+        ? List.of(Dimension.FORCE, Dimension.MASS, Dimension.MOMENT)
+        : List.of(Dimension.LENGTH, Dimension.ANGLE, Dimension.NUMBER);
   }
 
   private SheetReadings.Extras extras(ReadingsSheet sheet) {
     Unit seconds = new Unit("s", Dimension.TIME, 1, 0);
     Unit timeUnit =
         sheet
-            .column("Time")
+            .extra("Time")
             .filter(cell -> !cell.unit().isEmpty())
             .flatMap(
                 cell -> cells.unit(cell.unit(), cell.unitWhere(), List.of(Dimension.TIME), "time"))
@@ -224,14 +290,15 @@ final class RunBuilder {
   }
 
   private static int index(ReadingsSheet sheet, String column) {
-    return sheet.column(column).map(ReadingsSheet.HeaderCell::index).orElse(-1);
+    return sheet.extra(column).map(ReadingsSheet.HeaderCell::index).orElse(-1);
   }
 
   /** The run that a readings sheet is where the sheet Runs does not say otherwise. */
   static RunRows.RunRow whole(ReadingsSheet sheet) {
     Where where = sheet.sheet().where();
     return new RunRows.RunRow(
-        sheet.sheet().name(),
+        sheet.source().runName(),
+        sheet.source().file(),
         sheet.sheet().name(),
         0,
         Integer.MAX_VALUE,

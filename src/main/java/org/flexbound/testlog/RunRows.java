@@ -3,6 +3,7 @@ package org.flexbound.testlog;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -11,6 +12,7 @@ import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.Dimension;
 import org.flexbound.quantity.Unit;
+import org.flexbound.quantity.Units;
 
 /** Reads the sheet Runs: what each run's columns mean. */
 final class RunRows {
@@ -20,7 +22,8 @@ final class RunRows {
    * A run as the sheet describes it.
    *
    * @param name its name
-   * @param sheet the sheet of its readings
+   * @param file the file of its readings; empty for a sheet of the log's own workbook
+   * @param sheet the sheet of its readings; empty where the file has only one
    * @param firstRow its first row; 0 for the first below the header
    * @param lastRow its last row; the largest integer for the sheet's last
    * @param meanings column header to name of load or gauge
@@ -32,6 +35,7 @@ final class RunRows {
    */
   record RunRow(
       String name,
+      String file,
       String sheet,
       int firstRow,
       int lastRow,
@@ -51,7 +55,13 @@ final class RunRows {
    */
   record Meaning(String name, String column, Where where) {}
 
-  static List<RunRow> read(EntryTable table, EntryCells cells, Findings findings) {
+  /**
+   * Reads the table.
+   *
+   * @param files whether its rows name files and not only sheets
+   */
+  static List<RunRow> read(
+      EntryTable table, boolean files, EntryCells cells, Findings findings) {
     Map<String, List<EntryTable.Entry>> byName = new LinkedHashMap<>();
     for (EntryTable.Entry entry : table.entries()) {
       cells
@@ -59,12 +69,15 @@ final class RunRows {
           .ifPresent(name -> byName.computeIfAbsent(name, key -> new ArrayList<>()).add(entry));
     }
     List<RunRow> runs = new ArrayList<>();
-    byName.forEach((name, rows) -> run(table, name, rows, cells, findings).ifPresent(runs::add));
+    byName.forEach(
+        (name, rows) ->
+            run(table, files, name, rows, cells, findings).ifPresent(runs::add));
     return runs;
   }
 
   private static Optional<RunRow> run(
       EntryTable table,
+      boolean files,
       String name,
       List<EntryTable.Entry> rows,
       EntryCells cells,
@@ -82,7 +95,7 @@ final class RunRows {
       } else if (column.isPresent()) {
         Meaning earlier =
             meanings.putIfAbsent(
-                ReadingsSheet.key(column.get()),
+                HeaderText.claimedKey(column.get()),
                 new Meaning(meaning.get(), column.get(), row.get("Load or gauge").where()));
         if (earlier != null) {
           findings.add(
@@ -92,41 +105,47 @@ final class RunRows {
                   + earlier.where());
         }
       }
-      if (!EntryCells.text(row, "Sheet").equals(EntryCells.text(first, "Sheet"))
-          && !row.get("Sheet").isBlank()) {
-        findings.add(
-            TestlogFinding.TWICE,
-            row.get("Sheet").where(),
-            "found another sheet for the run '" + name + "'; expected '"
-                + EntryCells.text(first, "Sheet") + "', or another name for the run");
+      for (String place : files ? List.of("File", "Sheet") : List.of("Sheet")) {
+        if (!EntryCells.text(row, place).equals(EntryCells.text(first, place))
+            && !row.get(place).isBlank()) {
+          findings.add(
+              TestlogFinding.TWICE,
+              row.get(place).where(),
+              "found another " + place.toLowerCase(Locale.ROOT) + " for the run '" + name
+                  + "'; expected '" + EntryCells.text(first, place)
+                  + "', or another name for the run");
+        }
       }
     }
-    Optional<String> sheet = cells.need(first, "Sheet");
-    Unit celsius = org.flexbound.quantity.Units.known("°C");
-    OptionalDouble temperature = cells.number(first, "Temperature");
-    if (temperature.isPresent()) {
-      temperature =
-          OptionalDouble.of(
-              cells
-                  .headerUnit(
-                      table, "Temperature", celsius, Dimension.TEMPERATURE, "temperature")
-                  .toSi(temperature.getAsDouble()));
+    Optional<String> sheet =
+        files ? Optional.of(EntryCells.text(first, "Sheet")) : cells.need(first, "Sheet");
+    Optional<String> file = files ? cells.need(first, "File") : Optional.of("");
+    Unit celsius = Units.known("°C");
+    OptionalDouble temperature =
+        cells.si(table, first, "Temperature", celsius, Dimension.TEMPERATURE, "temperature");
+    int from = cells.row(first, "First row").orElse(0);
+    int to = cells.row(first, "Last row").orElse(Integer.MAX_VALUE);
+    if (from > to) {
+      findings.add(
+          TestlogFinding.OUT_OF_RANGE,
+          first.get("Last row").where(),
+          "found the last row " + to + " above the first row " + from);
     }
-    OptionalDouble from = cells.number(first, "First row");
-    OptionalDouble to = cells.number(first, "Last row");
-    OptionalDouble kelvin = temperature;
-    return sheet.map(
-        found ->
-            new RunRow(
-                name,
-                found,
-                (int) from.orElse(0),
-                (int) to.orElse(Integer.MAX_VALUE),
-                meanings,
-                EntryCells.text(first, "Date").replace("T00:00", ""),
-                kelvin,
-                cells.yes(first, "Use", true),
-                EntryCells.text(first, "Remark"),
-                first.get("Run").where()));
+    if (sheet.isEmpty() || file.isEmpty()) {
+      return Optional.empty();
+    }
+    return Optional.of(
+        new RunRow(
+            name,
+            file.get(),
+            sheet.get(),
+            from,
+            to,
+            meanings,
+            EntryCells.text(first, "Date").replace("T00:00", ""),
+            temperature,
+            cells.yes(first, "Use", true),
+            EntryCells.text(first, "Remark"),
+            first.get("Run").where()));
   }
 }

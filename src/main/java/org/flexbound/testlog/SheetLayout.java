@@ -1,5 +1,6 @@
 package org.flexbound.testlog;
 
+import java.util.ArrayList;
 import java.util.List;
 
 /**
@@ -146,6 +147,22 @@ record SheetLayout(String name, List<Column> columns, String help) {
               may("Use", "no leaves the run out", "yes", "no"),
               may("Remark", "anything")),
           "What the columns mean in each run, where a cell or a dial is moved about.");
+
+  /** The same in a description of a log, where a run may lie in another file. */
+  static final SheetLayout RUNS_IN_FILES = inFiles();
+
+  private static SheetLayout inFiles() {
+    List<Column> columns = new ArrayList<>();
+    for (Column column : RUNS.columns()) {
+      if (column.name().equals("Sheet")) {
+        columns.add(need("File", "the file with its readings"));
+        columns.add(may("Sheet", "its sheet, where that file has several"));
+      } else {
+        columns.add(column);
+      }
+    }
+    return new SheetLayout(RUNS.name(), columns, RUNS.help());
+  }
 
   static final SheetLayout OPTIONS =
       new SheetLayout(

@@ -17,6 +17,7 @@ final class SheetReadings implements Readings {
   private final int[] gaugeColumns;
   private final Unit[] gaugeUnits;
   private final Extras extras;
+  private final ReadingsLayout layout;
 
   /**
    * The columns beside loads and gauges; −1 where there is none.
@@ -37,7 +38,9 @@ final class SheetReadings implements Readings {
       Unit[] loadUnits,
       int[] gaugeColumns,
       Unit[] gaugeUnits,
-      Extras extras) {
+      Extras extras,
+      ReadingsLayout layout) {
+    this.layout = layout;
     this.sheet = sheet;
     this.firstRow = firstRow;
     this.lastRow = lastRow;
@@ -63,7 +66,10 @@ final class SheetReadings implements Readings {
         });
   }
 
-  private static double value(Row row, int column) {
+  private double value(Row row, int column) {
+    if (layout.isNoReading(row, column)) {
+      return Double.NaN;
+    }
     CellKind kind = row.kind(column);
     if (kind == CellKind.NUMBER) {
       return row.number(column);

@@ -19,13 +19,14 @@ public enum TestlogFinding implements FindingKind {
       "Fill it in; the sheet Examples shows how."),
   /** An entry is missing. */
   MISSING_ENTRY(
-      "LOG-MISSING-ENTRY", Severity.ERROR, "An entry that is needed is blank.", "Fill in the cell."),
+      "LOG-MISSING-ENTRY", Severity.ERROR, "An entry that is needed is blank.", "Fill it in."),
   /** A cell that must hold a number does not. */
   NOT_A_NUMBER(
       "LOG-NOT-A-NUMBER",
       Severity.ERROR,
       "A cell that must hold a number holds something else.",
-      "Enter a number, or clear the cell, or say no in the column Use of that row."),
+      "Enter a number, or clear the cell, or say no in the column Use of that row; in a description,"
+          + " state firstRow, lastRow or noReading."),
   /** A number was stored as text. */
   NUMBER_AS_TEXT(
       "LOG-NUMBER-AS-TEXT",
@@ -49,7 +50,7 @@ public enum TestlogFinding implements FindingKind {
       "LOG-NO-UNIT",
       Severity.ERROR,
       "A column has no unit.",
-      "State it in the column Unit, or in brackets in the header."),
+      "State it with the load point or the gauge, in brackets in the header, or in a units row."),
   /** A direction cannot be read. */
   DIRECTION(
       "LOG-DIRECTION", Severity.ERROR, "A direction cannot be read.", "Write it as in the message."),
@@ -78,7 +79,31 @@ public enum TestlogFinding implements FindingKind {
       "LOG-MISSING-COLUMN",
       Severity.ERROR,
       "A readings sheet lacks a column that its run needs.",
-      "Add the column, or correct its name on the sheet Load points, Gauges or Runs."),
+      "Add the column, or correct its name where the load points, gauges and runs are described."),
+  /** Two rows may be the header. */
+  HEADER_UNCERTAIN(
+      "LOG-HEADER-UNCERTAIN",
+      Severity.ERROR,
+      "Two rows of a sheet may name its columns.",
+      "Say in a description of the log which row it is (headerRow), or remove the other."),
+  /** A row between header and readings. */
+  ROW_NOT_USED(
+      "LOG-ROW-NOT-USED",
+      Severity.NOTE,
+      "A row between the header and the readings was not used.",
+      "Nothing to do, unless it was meant to be the units or readings."),
+  /** Cells that stand for no reading. */
+  READINGS_MISSING(
+      "LOG-READINGS-MISSING",
+      Severity.NOTE,
+      "Cells hold a text that the description of the log gives for a missing reading.",
+      "Nothing to do, unless readings were lost that are needed."),
+  /** Numbers are scaled. */
+  SCALED(
+      "LOG-SCALED",
+      Severity.NOTE,
+      "The numbers of a column are multiplied by a factor that the description of the log states.",
+      "Check the factor against the logger's settings."),
   /** Two entries claim one column. */
   COLUMN_CLAIMED_TWICE(
       "LOG-COLUMN-CLAIMED-TWICE",

@@ -1,0 +1,48 @@
+package org.flexbound.testlog;
+
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Optional;
+import java.util.Set;
+import org.flexbound.document.InputFolder;
+import org.flexbound.document.Json;
+import org.flexbound.document.JsonFile;
+import org.flexbound.document.JsonKeys;
+import org.flexbound.finding.Findings;
+import org.flexbound.finding.Outcome;
+
+/**
+ * Reads a description of a log: a JSON file that says what the workbook's sheets say, and names the
+ * files, sheets and columns in which the readings stand.
+ */
+final class DescribedLog {
+  private final Findings findings = new Findings();
+  private final List<InputFile> inputs = new ArrayList<>();
+
+  private DescribedLog() {}
+
+  static Outcome<TestLog> read(Path path, String shownName) {
+    return JsonFile.read(path, shownName)
+        .then(json -> new DescribedLog().log(json, path, shownName));
+  }
+
+  private Outcome<TestLog> log(Json json, Path path, String shownName) {
+    JsonKeys keys = new JsonKeys(findings);
+    Optional<Json.Members> top = keys.members(json, "a description of a log");
+    if (top.isEmpty()) {
+      return Outcome.none(findings.list());
+    }
+    keys.refuseOthers(top.get(), DescriptionKeys.top());
+    inputs.add(new InputFile(shownName, WorkbookLog.sha256(path)));
+    DescribedFiles files =
+        new DescribedFiles(InputFolder.of(path, shownName), keys, findings);
+    List<ReadingsSource> sources = files.sources(top.get());
+    Set<InputFile> read = new LinkedHashSet<>(files.inputs());
+    inputs.addAll(read);
+    TestLog log =
+        new LogReader(new DescribedTables(top.get(), findings), sources, findings).log(inputs);
+    return Outcome.of(log, findings.list());
+  }
+}
