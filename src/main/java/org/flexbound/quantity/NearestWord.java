@@ -19,7 +19,7 @@ public final class NearestWord {
    */
   public static List<String> of(String word, Collection<String> known) {
     return known.stream()
-        .filter(candidate -> distance(candidate, word) <= Math.max(1, word.length() / 3))
+        .filter(candidate -> distance(candidate, word) <= Math.max(1, (word.length() + 1) / 3))
         .sorted(
             Comparator.<String>comparingInt(candidate -> distance(candidate, word))
                 .thenComparing(Comparator.naturalOrder()))

@@ -109,16 +109,15 @@ final class DescribedTables implements LogTables {
         .members()
         .forEach(
             (key, entry) -> {
-              String name = known.get(key);
-              Optional<Value> cell = name == null ? Optional.empty() : value(entry);
-              cell.ifPresent(
-                  found -> {
-                    Map<String, Value> row = new LinkedHashMap<>();
-                    row.put("Item", text(name, entry.where()));
-                    row.put("Entry", found);
-                    gauge.ifPresent(g -> row.put("Gauge", text(g.text(), entry.where())));
-                    rows.add(row, entry.where());
-                  });
+              Optional<String> name = Optional.ofNullable(known.get(key));
+              Optional<Value> cell = name.flatMap(found -> value(entry));
+              if (name.isPresent() && cell.isPresent()) {
+                Map<String, Value> row = new LinkedHashMap<>();
+                row.put("Item", text(name.get(), entry.where()));
+                row.put("Entry", cell.get());
+                gauge.ifPresent(g -> row.put("Gauge", text(g.text(), entry.where())));
+                rows.add(row, entry.where());
+              }
             });
   }
 

@@ -173,7 +173,7 @@ final class LogReader {
     List<RunRows.RunRow> described =
         sheets
             .table(tables.runs())
-            .map(found -> RunRows.read(found, tables.runs() != SheetLayout.RUNS, cells, findings))
+            .map(found -> RunRows.read(found, !tables.runs().equals(SheetLayout.RUNS), cells, findings))
             .orElse(List.of());
     RunBuilder builder = new RunBuilder(claims, options.localGravity(), findings);
     HeaderSearch search =
