@@ -1,7 +1,10 @@
 package org.flexbound.report;
 
+import com.openhtmltopdf.bidi.support.ICUBidiReorderer;
+import com.openhtmltopdf.bidi.support.ICUBidiSplitter;
 import com.openhtmltopdf.extend.FSSupplier;
 import com.openhtmltopdf.outputdevice.helper.BaseRendererBuilder.FontStyle;
+import com.openhtmltopdf.outputdevice.helper.BaseRendererBuilder.TextDirection;
 import com.openhtmltopdf.pdfboxout.PdfBoxRenderer;
 import com.openhtmltopdf.pdfboxout.PdfRendererBuilder;
 import com.openhtmltopdf.svgsupport.BatikSVGDrawer;
@@ -25,7 +28,10 @@ final class ReportPdf {
     XRLog.setLoggingEnabled(false);
     PdfRendererBuilder builder = new PdfRendererBuilder();
     builder.useFastMode();
-    builder.withHtmlContent(ReportHtml.print(content), null);
+    builder.withHtmlContent(printable(ReportHtml.print(content)), null);
+    builder.useUnicodeBidiSplitter(new ICUBidiSplitter.ICUBidiSplitterFactory());
+    builder.useUnicodeBidiReorderer(new ICUBidiReorderer());
+    builder.defaultTextDirection(TextDirection.LTR);
     builder.useSVGDrawer(new BatikSVGDrawer());
     font(builder, "DejaVuSansCondensed.ttf", "DejaVu Sans Condensed", 400, FontStyle.NORMAL);
     font(builder, "DejaVuSansCondensed-Bold.ttf", "DejaVu Sans Condensed", 700, FontStyle.NORMAL);
@@ -46,6 +52,18 @@ final class ReportPdf {
     return bytes.toByteArray();
   }
 
+  private static String printable(String html) {
+    try {
+      return PrintGlyphs.of(file("DejaVuSansCondensed.ttf")).printable(html);
+    } catch (IOException unreadable) {
+      throw new UncheckedIOException("the print's font cannot be read", unreadable);
+    }
+  }
+
+  private static InputStream file(String name) {
+    return Objects.requireNonNull(ReportPdf.class.getResourceAsStream(FONTS + name));
+  }
+
   private static void describe(PDDocument document, ReportPage content) {
     document.getDocumentCatalog().setLanguage("en");
     PDDocumentInformation information = new PDDocumentInformation();
@@ -58,8 +76,7 @@ final class ReportPdf {
 
   private static void font(
       PdfRendererBuilder builder, String file, String family, int weight, FontStyle style) {
-    FSSupplier<InputStream> supplier =
-        () -> Objects.requireNonNull(ReportPdf.class.getResourceAsStream(FONTS + file));
+    FSSupplier<InputStream> supplier = () -> file(file);
     builder.useFont(supplier, family, weight, style, true);
   }
 }

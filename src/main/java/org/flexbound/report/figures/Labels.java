@@ -8,12 +8,17 @@ final class Labels {
 
   /** A long name with its middle left out. */
   static String brief(String name) {
+    return brief(name, LONGEST);
+  }
+
+  /** A name longer than so many characters with its middle left out. */
+  static String brief(String name, int longest) {
     int[] points = name.codePoints().map(p -> p < 0x20 ? ' ' : p).toArray();
-    if (points.length <= LONGEST) {
+    if (points.length <= longest) {
       return new String(points, 0, points.length);
     }
-    int head = LONGEST * 2 / 3;
-    int tail = LONGEST - head - 1;
+    int head = longest * 2 / 3;
+    int tail = longest - head - 1;
     return new String(points, 0, head) + "…" + new String(points, points.length - tail, tail);
   }
 

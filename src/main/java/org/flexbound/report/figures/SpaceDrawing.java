@@ -9,6 +9,12 @@ import java.util.Locale;
  * carries its coordinates ({@code data-p}), so that the page's script can turn the view.
  */
 final class SpaceDrawing {
+  /** A dot reaches this far from its middle. */
+  private static final double MARK = 5;
+
+  /** A stroke to be kept clear is watched at its ends and so many points less one between. */
+  private static final int CLEAR = 6;
+
   private final String id;
   private final int width;
   private final int height;
@@ -16,6 +22,8 @@ final class SpaceDrawing {
   private final List<Item> items = new ArrayList<>();
   private final List<double[]> extent = new ArrayList<>();
   private final List<double[]> boxes = new ArrayList<>();
+  private final List<double[]> marks = new ArrayList<>();
+  private final List<double[]> clear = new ArrayList<>();
 
   /** Something to draw: its points, and how. */
   private record Item(Kind kind, List<double[]> points, String style, String text) {}
@@ -53,6 +61,18 @@ final class SpaceDrawing {
     items.add(new Item(Kind.LABEL, List.of(point), style, text));
   }
 
+  /** Keeps labels off a stroke where that can be. */
+  void keepClear(double[] from, double[] to) {
+    for (int k = 0; k <= CLEAR; k++) {
+      double share = (double) k / CLEAR;
+      double[] point = new double[3];
+      for (int c = 0; c < 3; c++) {
+        point[c] = from[c] + share * (to[c] - from[c]);
+      }
+      clear.add(point);
+    }
+  }
+
   /** Makes the view large enough for a point that is drawn only in some figures. */
   void include(double[] point) {
     extent.add(point);
@@ -88,6 +108,12 @@ final class SpaceDrawing {
         .append("-desc\">")
         .append(escape(description))
         .append("</desc>");
+    clear.forEach(point -> marks.add(projection.at(point)));
+    for (Item item : items) {
+      if (item.kind() == Kind.DOT) {
+        marks.add(projection.at(item.points().get(0)));
+      }
+    }
     for (Item item : items) {
       append(svg, item);
     }
@@ -135,7 +161,7 @@ final class SpaceDrawing {
     }
   }
 
-  /** Puts a label beside its point where it covers no other label. */
+  /** Puts a label beside its point where it covers no other label and, where that can be, no dot. */
   private void label(StringBuilder svg, Item item, double[] at, String data) {
     String text = Labels.brief(item.text());
     double wide = 6.2 * text.codePointCount(0, text.length());
@@ -144,10 +170,14 @@ final class SpaceDrawing {
       {-10 - wide, 26}, {-10 - wide, -20}, {14, 40}, {14, -34}
     };
     double[] chosen = offsets[0];
+    int leastCovered = Integer.MAX_VALUE;
     for (double[] offset : offsets) {
-      if (free(at[0] + offset[0], at[1] + offset[1], wide)) {
+      double x = at[0] + offset[0];
+      double y = at[1] + offset[1];
+      int covered = free(x, y, wide) ? covered(x, y, wide) : Integer.MAX_VALUE;
+      if (covered < leastCovered) {
+        leastCovered = covered;
         chosen = offset;
-        break;
       }
     }
     boxes.add(new double[] {at[0] + chosen[0], at[1] + chosen[1], wide});
@@ -176,6 +206,17 @@ final class SpaceDrawing {
       }
     }
     return true;
+  }
+
+  /** How many dots a label would touch. */
+  private int covered(double x, double y, double wide) {
+    int count = 0;
+    for (double[] mark : marks) {
+      if (mark[0] > x - MARK && mark[0] < x + wide + MARK && mark[1] > y - 9 - MARK && mark[1] < y + 2 + MARK) {
+        count++;
+      }
+    }
+    return count;
   }
 
   private static String numbers(double... values) {

@@ -271,6 +271,7 @@ public final class StructureFigures {
       double[] tip = place(point).get();
       double[] tail = along(tip, point.direction(), -0.14 * size);
       drawing.line(List.of(tail, tip), LOAD);
+      drawing.keepClear(tail, tip);
       // The head, drawn as two strokes in a plane that holds the arrow.
       double[] direction = array(point.direction());
       double[] side = side(direction);

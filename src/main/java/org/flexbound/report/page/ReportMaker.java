@@ -99,7 +99,7 @@ public final class ReportMaker {
 
     List<Figure> matrix =
         new ArrayList<>(new FlexibilityPicture(units).draw(results.coefficients()));
-    matrix.addAll(ReciprocityFigure.draw(results.reciprocity()));
+    matrix.addAll(ReciprocityFigure.draw(results.reciprocity(), results.coefficients()));
     add(sections, "matrix-section", "Flexibility and reciprocity", matrix, false);
     List<Figure> curves = new LoadDeflectionFigures(units).draw(results.curves());
     if (!curves.isEmpty()) {
