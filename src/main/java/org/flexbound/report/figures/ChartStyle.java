@@ -15,6 +15,7 @@ import org.jfree.chart.block.BlockBorder;
 import org.jfree.chart.plot.CategoryPlot;
 import org.jfree.chart.plot.Plot;
 import org.jfree.chart.plot.XYPlot;
+import org.jfree.chart.text.TextUtils;
 import org.jfree.chart.title.LegendTitle;
 import org.jfree.chart.ui.HorizontalAlignment;
 import org.jfree.chart.ui.RectangleEdge;
@@ -24,6 +25,11 @@ import org.jfree.chart.ui.RectangleInsets;
 final class ChartStyle {
   private static final float LABEL = 12f;
   private static final float TICK = 11f;
+
+  static {
+    // Turned lettering stays text, which can be searched and read aloud, instead of outlines of its letters.
+    TextUtils.setUseDrawRotatedStringWorkaround(false);
+  }
 
   private ChartStyle() {}
 

@@ -5,8 +5,10 @@ import java.awt.Shape;
 import java.awt.geom.Rectangle2D;
 import java.io.StringWriter;
 import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Locale;
+import java.util.Set;
 import javax.xml.parsers.DocumentBuilderFactory;
 import javax.xml.parsers.ParserConfigurationException;
 import javax.xml.transform.OutputKeys;
@@ -21,6 +23,7 @@ import org.apache.batik.svggen.SVGIDGenerator;
 import org.w3c.dom.Document;
 import org.w3c.dom.Element;
 import org.w3c.dom.Node;
+import org.w3c.dom.NodeList;
 import org.w3c.dom.Text;
 
 /**
@@ -79,6 +82,8 @@ final class Drawing {
     Element root = canvas.getRoot();
     describe(root, title, description);
     trim(root);
+    Compaction.compact(root);
+    dropUnusedClips(root);
     return write(root);
   }
 
@@ -106,6 +111,21 @@ final class Drawing {
         text.setData(XmlText.clean(text.getData()));
       }
       child = next;
+    }
+  }
+
+  private static void dropUnusedClips(Element root) {
+    NodeList clips = root.getElementsByTagNameNS(SVG, "clipPath");
+    Set<String> used = new HashSet<>();
+    NodeList all = root.getElementsByTagNameNS(SVG, "*");
+    for (int k = 0; k < all.getLength(); k++) {
+      used.add(((Element) all.item(k)).getAttribute("clip-path"));
+    }
+    for (int k = clips.getLength() - 1; k >= 0; k--) {
+      Element clip = (Element) clips.item(k);
+      if (!used.contains("url(#" + clip.getAttribute("id") + ")")) {
+        clip.getParentNode().removeChild(clip);
+      }
     }
   }
 

@@ -9,7 +9,7 @@ final class Thinning {
   /** More points than this cannot be told apart in a plot of a few hundred pixels. */
   private static final int MOST = 240;
 
-  private static final int LEAST = 12;
+  private static final int LEAST = 9;
 
   /** Points of all plots of a report together, so that its page stays small enough to send. */
   private static final int BUDGET = 24_000;

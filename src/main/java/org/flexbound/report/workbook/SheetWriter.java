@@ -6,6 +6,8 @@ import java.util.OptionalDouble;
 import org.apache.poi.ss.usermodel.Cell;
 import org.apache.poi.ss.usermodel.Row;
 import org.apache.poi.ss.util.CellRangeAddress;
+import org.apache.poi.xssf.usermodel.XSSFCell;
+import org.apache.poi.xssf.usermodel.XSSFRow;
 import org.apache.poi.xssf.usermodel.XSSFSheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 
@@ -16,6 +18,7 @@ final class SheetWriter {
 
   private final XSSFSheet sheet;
   private final Styles styles;
+  private final SharedTexts texts;
   private final List<Integer> widths = new ArrayList<>();
   private final int columns;
   private int rows = 1;
@@ -23,6 +26,7 @@ final class SheetWriter {
   SheetWriter(XSSFWorkbook workbook, Styles styles, String name, String... headings) {
     this.sheet = workbook.createSheet(name);
     this.styles = styles;
+    this.texts = styles.texts();
     this.columns = headings.length;
     Row row = sheet.createRow(0);
     for (int column = 0; column < headings.length; column++) {
@@ -53,13 +57,13 @@ final class SheetWriter {
       throw new IllegalArgumentException(
           values.length + " values for " + columns + " columns of " + sheet.getSheetName());
     }
-    Row row = sheet.createRow(rows++);
+    XSSFRow row = sheet.createRow(rows++);
     for (int column = 0; column < values.length; column++) {
       fill(row.createCell(column), values[column], column);
     }
   }
 
-  private void fill(Cell cell, Object value, int column) {
+  private void fill(XSSFCell cell, Object value, int column) {
     if (value instanceof OptionalDouble optional) {
       if (optional.isPresent()) {
         number(cell, optional.getAsDouble());
@@ -74,7 +78,7 @@ final class SheetWriter {
       cell.setCellStyle(styles.text());
     } else {
       String text = safe(String.valueOf(value));
-      cell.setCellValue(text);
+      texts.fill(cell, text);
       cell.setCellStyle(styles.text());
       widths.set(column, Math.max(widths.get(column), Math.min(WIDEST, text.length())));
     }

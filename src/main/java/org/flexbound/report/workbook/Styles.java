@@ -8,15 +8,17 @@ import org.apache.poi.xssf.usermodel.XSSFCellStyle;
 import org.apache.poi.xssf.usermodel.XSSFFont;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 
-/** The cell styles of the workbook. */
+/** The cell styles of the workbook, and its texts. */
 final class Styles {
   private final XSSFCellStyle header;
   private final XSSFCellStyle text;
   private final XSSFCellStyle count;
   private final XSSFCellStyle plain;
   private final XSSFCellStyle power;
+  private final SharedTexts texts;
 
   Styles(XSSFWorkbook workbook) {
+    texts = new SharedTexts(workbook);
     XSSFFont bold = workbook.createFont();
     bold.setBold(true);
     header = workbook.createCellStyle();
@@ -37,6 +39,10 @@ final class Styles {
     plain.setDataFormat(workbook.createDataFormat().getFormat("0.00000"));
     power = workbook.createCellStyle();
     power.setDataFormat(workbook.createDataFormat().getFormat("0.0000E+00"));
+  }
+
+  SharedTexts texts() {
+    return texts;
   }
 
   XSSFCellStyle header() {
