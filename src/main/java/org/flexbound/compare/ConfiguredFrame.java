@@ -16,9 +16,12 @@ import org.flexbound.frame.StiffnessPath;
 import org.flexbound.frame.StiffnessSetting;
 import org.flexbound.setup.Gauge;
 import org.flexbound.setup.Load;
-import org.flexbound.solve.FlexibilitySolution;
+import org.flexbound.solve.ComputedFlexibility;
 import org.flexbound.solve.FrameFlexibility;
+import org.flexbound.solve.PreparedFlexibility;
+import org.flexbound.solve.TruncatedFlexibility;
 import org.flexbound.study.Configuration;
+import org.flexbound.study.FlexibilityChoice;
 import org.flexbound.study.Parameter;
 import org.flexbound.study.Study;
 
@@ -29,13 +32,13 @@ import org.flexbound.study.Study;
 public final class ConfiguredFrame {
   private final FrameModel model;
   private final MeasuredFlexibility measured;
-  private final FrameFlexibility flexibility;
+  private final PreparedFlexibility flexibility;
   private final List<StiffnessPath> paths;
 
   private ConfiguredFrame(
       FrameModel model,
       MeasuredFlexibility measured,
-      FrameFlexibility flexibility,
+      PreparedFlexibility flexibility,
       List<StiffnessPath> paths) {
     this.model = model;
     this.measured = measured;
@@ -141,10 +144,31 @@ public final class ConfiguredFrame {
     }
     FrameModel frame = changed.value().get();
     List<StiffnessPath> paths = known(study, frame);
-    Outcome<FrameFlexibility> ready =
+    return ready(study, frame, measured, paths, findings)
+        .map(r -> new ConfiguredFrame(frame, measured, r, paths));
+  }
+
+  /** In full, or from the lowest modes; a structure that moves freely is refused either way. */
+  private static Optional<? extends PreparedFlexibility> ready(
+      Study study,
+      FrameModel frame,
+      MeasuredFlexibility measured,
+      List<StiffnessPath> paths,
+      Findings findings) {
+    Outcome<FrameFlexibility> full =
         FrameFlexibility.prepare(frame, measured.gauges(), measured.loads(), paths);
-    findings.addAll(ready.findings());
-    return ready.value().map(r -> new ConfiguredFrame(frame, measured, r, paths));
+    findings.addAll(full.findings());
+    if (full.value().isEmpty()
+        || !(study.flexibility() instanceof FlexibilityChoice.Truncated truncated)) {
+      return full.value();
+    }
+    Outcome<TruncatedFlexibility> modes =
+        TruncatedFlexibility.prepare(
+            frame, measured.gauges(), measured.loads(), paths, truncated.modes());
+    modes.findings().stream()
+        .filter(finding -> !full.findings().contains(finding))
+        .forEach(finding -> findings.addAll(List.of(finding)));
+    return modes.value();
   }
 
   /** The scaled stiffnesses that a frame has. */
@@ -261,7 +285,7 @@ public final class ConfiguredFrame {
    * @param settings by path; those not named stay nominal, those not there are passed over
    * @return the solution
    */
-  public FlexibilitySolution solve(Map<StiffnessPath, StiffnessSetting> settings) {
+  public ComputedFlexibility solve(Map<StiffnessPath, StiffnessSetting> settings) {
     return flexibility.solve(
         paths.stream()
             .map(path -> settings.getOrDefault(path, StiffnessSetting.nominal()))
@@ -273,7 +297,7 @@ public final class ConfiguredFrame {
    *
    * @return the solution
    */
-  public FlexibilitySolution nominal() {
+  public ComputedFlexibility nominal() {
     return solve(new LinkedHashMap<>());
   }
 

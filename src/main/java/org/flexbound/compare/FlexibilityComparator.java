@@ -14,7 +14,7 @@ import org.flexbound.flexibility.AbsoluteCoefficient;
 import org.flexbound.flexibility.Coefficient;
 import org.flexbound.flexibility.MeasuredFlexibility;
 import org.flexbound.frame.FrameModel;
-import org.flexbound.solve.FlexibilitySolution;
+import org.flexbound.solve.ComputedFlexibility;
 import org.flexbound.solve.PartContribution;
 import org.flexbound.study.Study;
 
@@ -60,7 +60,7 @@ public final class FlexibilityComparator {
   }
 
   private static ConfigurationComparison compare(
-      ConfiguredFrame frame, FlexibilitySolution solution, Findings findings) {
+      ConfiguredFrame frame, ComputedFlexibility solution, Findings findings) {
     MeasuredFlexibility measured = frame.measured();
     double[] absolute = frame.absolute(solution.values());
     double[] computed = measured.map().apply(absolute);
@@ -117,7 +117,7 @@ public final class FlexibilityComparator {
 
   /** Each part's contribution to every compared coefficient. */
   private static Map<String, double[]> parts(
-      MeasuredFlexibility measured, FlexibilitySolution solution) {
+      MeasuredFlexibility measured, ComputedFlexibility solution) {
     Map<String, double[]> absolute = new LinkedHashMap<>();
     int size = measured.absolute().size();
     for (int i = 0; i < size; i++) {

@@ -5,7 +5,7 @@ import java.util.List;
 import org.flexbound.flexibility.AbsoluteCoefficient;
 import org.flexbound.flexibility.MeasuredFlexibility;
 import org.flexbound.setup.Placing;
-import org.flexbound.solve.FlexibilitySolution;
+import org.flexbound.solve.ComputedFlexibility;
 
 /**
  * What uncertain places and directions of gauges and loads do to the absolute coefficients, by the
@@ -23,7 +23,7 @@ public final class PlacingEffects {
    * @return vectors in the order of {@code MeasuredFlexibility.absolute()}: what one standard
    *     uncertainty of one coordinate or angle adds, SI
    */
-  public static List<double[]> of(ConfiguredFrame frame, FlexibilitySolution solution) {
+  public static List<double[]> of(ConfiguredFrame frame, ComputedFlexibility solution) {
     MeasuredFlexibility measured = frame.measured();
     List<double[]> result = new ArrayList<>();
     for (int g = 0; g < measured.gauges().size(); g++) {

@@ -37,6 +37,36 @@ final class Fields {
   }
 
   /**
+   * Fields that were made of modes.
+   *
+   * @param size number of freedoms
+   * @param motions size × (gauges, then loads)
+   */
+  static Fields given(int size, double[] motions) {
+    return new Fields(size, motions, new double[0][0], 0, 0, 1);
+  }
+
+  /**
+   * What a functional reads under one column.
+   *
+   * @param functional a gauge, a load, or a derivative of one
+   * @param structure the structure
+   * @param state its stiffnesses
+   * @param column gauges, then loads
+   */
+  double read(Functional functional, Structure structure, State state, int column) {
+    double motion = functional.of(motions, column * size);
+    if (functional.strain().isEmpty()) {
+      return motion;
+    }
+    Functional.Strain strain = functional.strain().get();
+    double[] d =
+        structure.elements().get(strain.element()).deformation(motions, column, size);
+    double[] s = Matrix6.times(state.basic(strain.element()), d);
+    return motion + Matrix6.dot(strain.row(state.stiffness()), s);
+  }
+
+  /**
    * Solves.
    *
    * @param structure the structure

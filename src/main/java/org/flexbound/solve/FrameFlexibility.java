@@ -1,13 +1,14 @@
 package org.flexbound.solve;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import org.flexbound.finding.Finding;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
+import org.flexbound.finding.Refusal;
 import org.flexbound.finding.Where;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.Stiffness;
@@ -25,7 +26,7 @@ import org.flexbound.sparse.PivotBreakdownException;
  *
  * <p>Not for use by several threads at a time.
  */
-public final class FrameFlexibility {
+public final class FrameFlexibility implements PreparedFlexibility {
   /**
    * A spring that may be set is worked by its gap where it is stiffer than this multiple of its
    * nominal value: as a spring it would cost digits, as a gap it costs none.
@@ -227,21 +228,7 @@ public final class FrameFlexibility {
     return made;
   }
 
-  /** The settings that change nothing. */
-  public List<StiffnessSetting> nominal() {
-    StiffnessSetting[] settings = new StiffnessSetting[parameters.size()];
-    Arrays.fill(settings, StiffnessSetting.nominal());
-    return List.of(settings);
-  }
-
-  /**
-   * Solves for settings of the parameters.
-   *
-   * @param settings one for each parameter, in their order
-   * @return the solution
-   * @throws PivotBreakdownException where a setting (a joint set free) lets the structure move
-   *     freely
-   */
+  @Override
   public FlexibilitySolution solve(List<StiffnessSetting> settings) {
     if (settings.size() != parameters.size()) {
       throw new IllegalArgumentException(
@@ -259,8 +246,35 @@ public final class FrameFlexibility {
     }
     Structure structure = structure(stiffness, open, spring -> {});
     State state = new State(structure, stiffness);
-    Fields fields = Fields.of(structure, state, columns());
-    return new FlexibilitySolution(this, structure, state, fields, evidence(structure, fields), settings);
+    Fields fields;
+    try {
+      fields = Fields.of(structure, state, columns());
+    } catch (PivotBreakdownException breakdown) {
+      throw new Refusal(List.of(freed(breakdown, structure, state, settings)));
+    }
+    return new FlexibilitySolution(
+        this, structure, state, fields, evidence(structure, fields), settings);
+  }
+
+  private Finding freed(
+      PivotBreakdownException breakdown,
+      Structure structure,
+      State state,
+      List<StiffnessSetting> settings) {
+    String motion = new Mechanism(model, structure, state).describe(breakdown.unknown());
+    return new Finding(
+        SolveFinding.MECHANISM, model.where(), setFree(parameters, settings) + motion);
+  }
+
+  /** Names the stiffnesses that are set to nothing. */
+  static String setFree(List<StiffnessPath> parameters, List<StiffnessSetting> settings) {
+    List<String> free = new ArrayList<>();
+    for (int k = 0; k < settings.size(); k++) {
+      if (settings.get(k) instanceof StiffnessSetting.Value value && value.stiffness() == 0) {
+        free.add(parameters.get(k).toString());
+      }
+    }
+    return free.isEmpty() ? "as set: " : "with " + String.join(", ", free) + " set free: ";
   }
 
   private boolean worksByGap(int slot, double stiffness) {
@@ -275,23 +289,32 @@ public final class FrameFlexibility {
     return stiff || Double.isInfinite(stiffness);
   }
 
-  /** The gauges, the rows. */
+  @Override
   public List<Gauge> gauges() {
     return gauges;
   }
 
-  /** The loads, the columns. */
+  @Override
   public List<Load> loads() {
     return loads;
   }
 
-  /** The stiffnesses that may be set. */
+  @Override
   public List<StiffnessPath> parameters() {
     return parameters;
   }
 
   /** A stiffness of the model with the settings of its own path. */
   Stiffness asSet(StiffnessPath path, List<StiffnessSetting> settings) {
+    return asSet(model, parameters, settings, path);
+  }
+
+  /** A stiffness of a model with the settings of its own path. */
+  static Stiffness asSet(
+      FrameModel model,
+      List<StiffnessPath> parameters,
+      List<StiffnessSetting> settings,
+      StiffnessPath path) {
     Stiffness result =
         model
             .stiffness(path)
@@ -308,23 +331,11 @@ public final class FrameFlexibility {
     return mesh;
   }
 
-  Readings readings() {
-    return readings;
+  PlaceDerivatives places() {
+    return new PlaceDerivatives(readings, gauges, gaugePlaces, loads, loadPlaces);
   }
 
   List<Functional> gaugeRows() {
     return gaugeRows;
-  }
-
-  List<Functional> loadColumns() {
-    return loadColumns;
-  }
-
-  List<Place> gaugePlaces(int gauge) {
-    return gaugePlaces.get(gauge);
-  }
-
-  List<Place> loadPlaces(int load) {
-    return loadPlaces.get(load);
   }
 }

@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalInt;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
@@ -36,8 +37,8 @@ public final class FrameModes {
   private final List<Map<String, double[]>> shapes;
 
   private FrameModes(ModalModel model, EigenPairs pairs, int rigid, double[][] full) {
-    this.gauges = model.gauges();
-    this.loads = model.loads();
+    this.gauges = model.frame().gauges();
+    this.loads = model.frame().loads();
     this.rigidBodyModes = rigid;
     this.unknowns = pairs.size();
     int count = pairs.count() - rigid;
@@ -68,51 +69,21 @@ public final class FrameModes {
   public static Outcome<FrameModes> of(
       FrameModel model, List<Gauge> gauges, List<Load> loads, ModeSettings settings) {
     Findings findings = new Findings();
-    PlaceFinder finder = new PlaceFinder(model, findings);
-    List<List<Place>> gaugePlaces = gauges.stream().map(finder::of).toList();
-    List<List<Place>> loadPlaces = loads.stream().map(finder::of).toList();
-    if (findings.hasErrors()) {
+    Optional<DividedFrame.Settled> settled =
+        DividedFrame.settle(model, gauges, loads, settings, findings);
+    if (settled.isEmpty()) {
       return Outcome.none(findings.list());
     }
-    boolean massless =
-        model.masses().stream().allMatch(m -> m.mass() == 0)
-            && model.members().values().stream()
-                .allMatch(
-                    m -> m.massPerLength() == 0 && model.material(m.material()).density() == 0);
-    if (massless) {
-      findings.add(
-          SolveFinding.NO_MASS,
-          model.where(),
-          "no material has a density and there is no mass; modes need mass");
-      return Outcome.none(findings.list());
-    }
-    Map<String, Integer> division = new LinkedHashMap<>();
-    int members = Math.max(1, model.members().size());
-    int first =
-        settings.pieces().orElse((int) Math.ceil(settings.count() * 2 / (6.0 * members)));
-    model.members().keySet().forEach(name -> division.put(name, Math.max(1, first)));
-    ModalModel modal =
-        new ModalModel(model, gauges, gaugePlaces, loads, loadPlaces, division, findings);
-    EigenPairs pairs = modal.lowest(settings.count());
-    int rigid = modal.rigidBodyModes(pairs);
-    if (settings.pieces().isEmpty() && pairs.count() > rigid) {
-      double highest = Math.sqrt(pairs.values()[pairs.count() - 1]);
-      Map<String, Integer> wanted = Division.of(model, highest);
-      wanted.replaceAll((name, pieces) -> Math.max(pieces, division.getOrDefault(name, 1)));
-      if (!wanted.equals(division)) {
-        modal =
-            new ModalModel(
-                model, gauges, gaugePlaces, loads, loadPlaces, wanted, new Findings());
-        pairs = modal.lowest(settings.count());
-        rigid = modal.rigidBodyModes(pairs);
-      }
-    }
-    if (rigid > 0) {
-      EigenPairs more = modal.lowest(settings.count() + rigid);
-      pairs = more;
-      rigid = modal.rigidBodyModes(more);
-    }
-    tell(pairs, settings.count() + rigid, model, findings);
+    return of(settled.get(), settings.count(), findings);
+  }
+
+  /** The modes of a divided frame that were found already. */
+  static Outcome<FrameModes> of(DividedFrame.Settled settled, int count, Findings findings) {
+    FrameModel model = settled.frame().model();
+    ModalModel modal = settled.nominal();
+    EigenPairs pairs = settled.pairs();
+    int rigid = settled.rigid();
+    tell(pairs, count + rigid, model, findings);
     if (findings.hasErrors()) {
       return Outcome.none(findings.list());
     }

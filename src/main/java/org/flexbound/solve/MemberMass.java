@@ -25,6 +25,70 @@ final class MemberMass {
   private MemberMass() {}
 
   /**
+   * The derivatives of the matrix by the logarithms of Φy and Φz, the shares of the shear deflection
+   * in bending about y and about z.
+   *
+   * @return [Φy, Φz] 12 × 12 each, row by row
+   */
+  static double[][] byShear(
+      FrameModel model,
+      Member member,
+      Mesh.Piece piece,
+      MemberElement element,
+      double[] stiffness) {
+    Material material = model.material(member.material());
+    double length = element.unit().length();
+    double[][] local = new double[2][144];
+    double phiY = shear(stiffness[element.slot(1)], stiffness[element.slot(5)], length);
+    double phiZ = shear(stiffness[element.slot(2)], stiffness[element.slot(4)], length);
+    for (int g = 0; g < POINTS.length; g++) {
+      double x = (1 + POINTS[g]) / 2;
+      double weight = WEIGHTS[g] / 2 * length;
+      SectionProperties section =
+          MeshBuilder.sectionAt(
+              model,
+              member,
+              material.poissonRatio(),
+              piece.from() + (piece.to() - piece.from()) * x);
+      double mass = weight * (material.density() * section.area() + member.massPerLength());
+      double aboutY = weight * material.density() * section.iy();
+      double aboutZ = weight * material.density() * section.iz();
+      Rows.addByShear(
+          local[0], mass, phiY, deflection(x, length, phiY, 2, 4, -1), sheared(x, length, 2, 4, -1));
+      Rows.addByShear(
+          local[0], aboutY, phiY, rotation(x, length, phiY, 2, 4, -1), turned(x, 4));
+      Rows.addByShear(
+          local[1], mass, phiZ, deflection(x, length, phiZ, 1, 5, 1), sheared(x, length, 1, 5, 1));
+      Rows.addByShear(
+          local[1], aboutZ, phiZ, rotation(x, length, phiZ, 1, 5, 1), turned(x, 5));
+    }
+    double angle = model.startSection(member).principalAngle();
+    double[][] result = new double[2][];
+    for (int i = 0; i < 2; i++) {
+      result[i] =
+          Rows.atPoints(local[i], axes(piece, angle), piece.startArm(), piece.endArm());
+    }
+    return result;
+  }
+
+  /** The deflected shapes where all deflection is by shear. */
+  private static double[] sheared(double x, double l, int shift, int turn, double sign) {
+    double[] n = new double[12];
+    n[shift] = 1 - x;
+    n[turn] = sign * l * (x - x * x) / 2;
+    n[shift + 6] = x;
+    n[turn + 6] = -sign * l * (x - x * x) / 2;
+    return n;
+  }
+
+  private static double[] turned(double x, int turn) {
+    double[] n = new double[12];
+    n[turn] = 1 - x;
+    n[turn + 6] = x;
+    return n;
+  }
+
+  /**
    * The matrix at the freedoms of the piece's two points.
    *
    * @param model the model
@@ -122,6 +186,19 @@ final class MemberMass {
           for (int j = 0; j < 12; j++) {
             sum[12 * i + j] += factor * row[i] * row[j];
           }
+        }
+      }
+    }
+
+    /**
+     * The derivative of factor · n nᵀ by ln Φ, where (1 + Φ) n = a + Φ b and so Φ dn/dΦ = Φ (b − n)/(1
+     * + Φ).
+     */
+    static void addByShear(double[] sum, double factor, double phi, double[] n, double[] b) {
+      for (int i = 0; i < 12; i++) {
+        for (int j = 0; j < 12; j++) {
+          double change = (b[i] - n[i]) * n[j] + n[i] * (b[j] - n[j]);
+          sum[12 * i + j] += factor * phi / (1 + phi) * change;
         }
       }
     }

@@ -1,16 +1,11 @@
 package org.flexbound.solve;
 
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.flexbound.finding.Findings;
-import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.Member;
-import org.flexbound.setup.Gauge;
-import org.flexbound.setup.GaugeKind;
-import org.flexbound.setup.Load;
 import org.flexbound.sparse.EigenPairs;
 import org.flexbound.sparse.EigenSettings;
 import org.flexbound.sparse.EigenSolver;
@@ -23,94 +18,70 @@ final class ModalModel {
   /** A mode whose strain energy is below this share of what its motions would have, one by one. */
   private static final double RIGID = 1e-12;
 
-  private final FrameModel model;
-  private final List<Gauge> gauges;
-  private final List<Load> loads;
+  private final DividedFrame frame;
   private final Mesh mesh;
   private final Structure structure;
   private final State state;
   private final SymmetricMatrix stiffness;
   private final SymmetricMatrix mass;
-  private final List<Functional> gaugeRows = new ArrayList<>();
-  private final List<Functional> loadColumns = new ArrayList<>();
   private final double[] slots;
 
-  ModalModel(
-      FrameModel model,
-      List<Gauge> gauges,
-      List<List<Place>> gaugePlaces,
-      List<Load> loads,
-      List<List<Place>> loadPlaces,
-      Map<String, Integer> division,
-      Findings findings) {
-    this.model = model;
-    this.gauges = List.copyOf(gauges);
-    this.loads = List.copyOf(loads);
-    MeshBuilder builder = new MeshBuilder(model);
-    builder.forModes(division);
-    for (int g = 0; g < gauges.size(); g++) {
-      if (gauges.get(g).kind() != GaugeKind.STRAIN) {
-        gaugePlaces.get(g).forEach(builder::divide);
-      }
-    }
-    loadPlaces.forEach(places -> places.forEach(builder::divide));
-    mesh = builder.build();
-    slots = mesh.slots().set(List.of(), List.of());
-    Readings readings = new Readings(model, mesh);
-    for (int g = 0; g < gauges.size(); g++) {
-      gaugeRows.add(readings.of(gauges.get(g), gaugePlaces.get(g)));
-    }
-    for (int l = 0; l < loads.size(); l++) {
-      loadColumns.add(readings.of(loads.get(l), loadPlaces.get(l)));
-    }
-    List<Map<Integer, Double>> held = new ArrayList<>();
-    if (!model.supports().isEmpty()) {
-      held.addAll(
-          new Holding(model, mesh, findings)
-              .rows(gauges, gaugePlaces, loads, loadPlaces, loadColumns));
-    }
-    Structure first = structure(held);
-    if (!new IdleFreedoms(first, columns()).hold(slots, held).isEmpty()) {
-      first = structure(held);
-    }
-    structure = first;
+  /** By member piece. */
+  private final Mesh.Piece[] pieces;
+
+  private final Member[] members;
+
+  ModalModel(DividedFrame frame, Structure structure, double[] slots) {
+    this.frame = frame;
+    this.mesh = frame.mesh();
+    this.structure = structure;
+    this.slots = slots;
     state = new State(structure, slots);
     stiffness =
         structure.assemble(
             (e, values) -> structure.elements().get(e).stiffness(state.basic(e), values));
-    mass = mass();
-  }
-
-  private Structure structure(List<Map<Integer, Double>> held) {
-    return Structure.of(
-        mesh,
-        slots,
-        new boolean[slots.length],
-        held,
-        PlaceFinder.extent(model),
-        FactorSettings.defaults(),
-        spring -> {});
-  }
-
-  private SymmetricMatrix mass() {
-    Mesh.Piece[] pieces = new Mesh.Piece[mesh.members().size()];
-    Member[] members = new Member[pieces.length];
+    pieces = new Mesh.Piece[mesh.members().size()];
+    members = new Member[pieces.length];
     mesh.pieces()
         .forEach(
             (name, list) ->
                 list.forEach(
                     piece -> {
                       pieces[piece.element()] = piece;
-                      Member member = model.members().get(name);
+                      Member member = frame.model().members().get(name);
                       if (member != null) {
                         members[piece.element()] = member;
                       }
                     }));
+    mass = mass();
+  }
+
+  DividedFrame frame() {
+    return frame;
+  }
+
+  Structure structure() {
+    return structure;
+  }
+
+  State state() {
+    return state;
+  }
+
+  SymmetricMatrix stiffness() {
+    return stiffness;
+  }
+
+  SymmetricMatrix massMatrix() {
+    return mass;
+  }
+
+  private SymmetricMatrix mass() {
     return structure.assemble(
         (e, values) -> {
           Element element = structure.elements().get(e);
           if (element instanceof MemberElement member) {
-            double[] m = MemberMass.of(model, members[e], pieces[e], member, slots);
+            double[] m = MemberMass.of(frame.model(), members[e], pieces[e], member, slots);
             System.arraycopy(m, 0, values, 0, m.length);
           } else if (element instanceof BodyElement body) {
             body.writeMass(values);
@@ -118,12 +89,6 @@ final class ModalModel {
             Arrays.fill(values, 0, element.freedoms() * element.freedoms(), 0);
           }
         });
-  }
-
-  private Functional[] columns() {
-    List<Functional> all = new ArrayList<>(gaugeRows);
-    all.addAll(loadColumns);
-    return all.toArray(Functional[]::new);
   }
 
   EigenPairs lowest(int count) {
@@ -162,27 +127,33 @@ final class ModalModel {
   }
 
   double[] atGauges(double[] motions) {
-    double[] result = new double[gaugeRows.size()];
+    double[] result = new double[frame.gaugeRows().size()];
     for (int g = 0; g < result.length; g++) {
-      result[g] = read(gaugeRows.get(g), motions);
+      result[g] = read(frame.gaugeRows().get(g), motions);
     }
     return result;
   }
 
   double[] atLoads(double[] motions) {
-    return loadColumns.stream().mapToDouble(column -> column.of(motions, 0)).toArray();
+    return frame.loadColumns().stream().mapToDouble(column -> column.of(motions, 0)).toArray();
+  }
+
+  double read(Functional functional, Fields fields, int column) {
+    return fields.read(functional, structure, state, column);
   }
 
   private double read(Functional functional, double[] motions) {
-    double value = functional.of(motions, 0);
-    if (functional.strain().isPresent()) {
-      Functional.Strain strain = functional.strain().get();
-      double[] d =
-          structure.elements().get(strain.element()).deformation(motions, 0, motions.length);
-      value +=
-          Matrix6.dot(strain.row(slots), Matrix6.times(state.basic(strain.element()), d));
-    }
-    return value;
+    return read(functional, Fields.given(motions.length, motions), 0);
+  }
+
+  /** A member piece's mass as its shear deflection changes, see {@link MemberMass}. */
+  double[][] massByShear(int element) {
+    return MemberMass.byShear(
+        frame.model(),
+        members[element],
+        pieces[element],
+        mesh.members().get(element),
+        slots);
   }
 
   Map<String, double[]> atNodes(double[] motions) {
@@ -201,25 +172,26 @@ final class ModalModel {
   double[][] full(EigenPairs pairs, int rigid, Findings findings) {
     Structure held = structure;
     State heldState = state;
-    if (rigid > 0) {
+    // A structure with supports that still moves freely breaks down below and is described.
+    if (rigid > 0 && frame.model().supports().isEmpty()) {
       List<Map<Integer, Double>> rows =
-          new Holding(model, mesh, findings).free(loads, loadColumns);
-      held = structure(rows);
+          new Holding(frame.model(), mesh, findings).free(frame.loads(), frame.loadColumns());
+      held = frame.structure(slots, rows);
       heldState = new State(held, slots);
     }
     Fields fields;
     try {
-      fields = Fields.of(held, heldState, columns());
+      fields = Fields.of(held, heldState, frame.columns());
     } catch (PivotBreakdownException breakdown) {
       findings.add(
           SolveFinding.MECHANISM,
-          model.where(),
-          new Mechanism(model, held, heldState).describe(breakdown.unknown()));
+          frame.model().where(),
+          new Mechanism(frame.model(), held, heldState).describe(breakdown.unknown()));
       return new double[0][0];
     }
-    double[][] result = new double[gauges.size()][loads.size()];
-    for (int l = 0; l < loads.size(); l++) {
-      int from = (gauges.size() + l) * fields.size();
+    double[][] result = new double[frame.gauges().size()][frame.loads().size()];
+    for (int l = 0; l < frame.loads().size(); l++) {
+      int from = (frame.gauges().size() + l) * fields.size();
       double[] motions =
           Arrays.copyOfRange(fields.motions(), from, from + fields.size());
       for (int k = 0; k < rigid; k++) {
@@ -249,13 +221,5 @@ final class ModalModel {
     for (int f = 0; f < motions.length; f++) {
       motions[f] -= share * moved[f];
     }
-  }
-
-  List<Gauge> gauges() {
-    return gauges;
-  }
-
-  List<Load> loads() {
-    return loads;
   }
 }

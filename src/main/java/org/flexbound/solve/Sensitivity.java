@@ -8,20 +8,17 @@ import java.util.List;
  * ∂a_ij/∂(1/θ) = s_iᵀ F s_j; for a spring ∂a_ij/∂θ = −δ_i δ_j. A strain gauge's unit load is an
  * imposed strain; where its row itself depends on θ, that is added.
  */
-final class Sensitivity {
+final class Sensitivity implements Derivatives.Source {
   private final Structure structure;
   private final State state;
   private final Fields fields;
   private final List<Functional> gauges;
-  private final int loads;
 
-  Sensitivity(
-      Structure structure, State state, Fields fields, List<Functional> gauges, int loads) {
+  Sensitivity(Structure structure, State state, Fields fields, List<Functional> gauges) {
     this.structure = structure;
     this.state = state;
     this.fields = fields;
     this.gauges = gauges;
-    this.loads = loads;
   }
 
   /** Is told derivatives. */
@@ -61,12 +58,9 @@ final class Sensitivity {
     };
   }
 
-  /** Goes through the elements that have one of the slots; for all gauges and loads. */
-  void collect(boolean[] wanted, Sink sink) {
-    collect(wanted, 0, gauges.size(), 0, loads, sink);
-  }
-
-  void collect(
+  /** Goes through the elements that have one of the slots. */
+  @Override
+  public void collect(
       boolean[] wanted, int gaugeFrom, int gaugeTo, int loadFrom, int loadTo, Sink sink) {
     for (int e = 0; e < structure.elements().size(); e++) {
       Element element = structure.elements().get(e);

@@ -75,6 +75,11 @@ public enum SolveFinding implements FindingKind {
       Severity.ERROR,
       "The model has no mass, so that it has no modes.",
       "State the density of a material, or masses."),
+  /** A cut between modes that cannot be told apart. */
+  CUT_MOVED(
+      Severity.WARNING,
+      "The modes were to be cut between two of nearly the same frequency: the cut is moved.",
+      "Nothing, or state a number of modes that ends at a gap."),
   /** Modes that did not settle. */
   MODES_NOT_SETTLED(
       Severity.WARNING,

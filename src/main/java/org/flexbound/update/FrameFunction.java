@@ -8,7 +8,7 @@ import org.flexbound.compare.ConfiguredFrame;
 import org.flexbound.frame.StiffnessPath;
 import org.flexbound.frame.StiffnessSetting;
 import org.flexbound.solve.Derivative;
-import org.flexbound.solve.FlexibilitySolution;
+import org.flexbound.solve.ComputedFlexibility;
 import org.flexbound.study.Working;
 
 /** The flexibility of frames, all configurations, as a function of the parameters. */
@@ -74,7 +74,7 @@ final class FrameFunction implements FlexibilityFunction {
     double[][] jacobian = new double[size][x.length];
     int offset = 0;
     for (ConfiguredFrame frame : frames) {
-      FlexibilitySolution solution = frame.solve(settings);
+      ComputedFlexibility solution = frame.solve(settings);
       double[] own = frame.absolute(solution.values());
       System.arraycopy(own, 0, values, offset, own.length);
       double[][][] logarithms = solution.byLogarithms(logarithmic);
@@ -103,7 +103,7 @@ final class FrameFunction implements FlexibilityFunction {
 
   /** ∂A/∂x of one stiffness; by the compliance near rigid, by the stiffness near free. */
   private double[] derivative(
-      ConfiguredFrame frame, FlexibilitySolution solution, int index, int k, double x) {
+      ConfiguredFrame frame, ComputedFlexibility solution, int index, int k, double x) {
     WorkingParameter parameter = parameters.get(k);
     return switch (parameter.parameter().working()) {
       case LN -> frame.absolute(solution.derivative(index, Derivative.LOGARITHM));
