@@ -81,6 +81,7 @@ final class Spellings {
     names(table, one.divide(100), "%");
     names(table, one.divide(1e6), "µε", "ue", "ustrain", "microstrain", "ppm");
     names(table, METRE.divide(1e6), "micron", "microns");
+    prefixed(table, one.divide(SECOND), "Hz", "k");
     alias(table);
     return Collections.unmodifiableMap(table);
   }

@@ -6,13 +6,12 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import java.util.function.UnaryOperator;
-import java.util.regex.Pattern;
 import org.flexbound.document.CellKind;
 import org.flexbound.document.EntryTable;
+import org.flexbound.document.StatedNumber;
 import org.flexbound.finding.Findings;
 import org.flexbound.quantity.Dimension;
 import org.flexbound.quantity.NearestWord;
-import org.flexbound.quantity.Quantity;
 import org.flexbound.quantity.Unit;
 import org.flexbound.quantity.UnitException;
 import org.flexbound.quantity.Units;
@@ -21,10 +20,6 @@ import org.flexbound.setup.DirectionText;
 
 /** Takes typed entries out of the cells of an entry sheet, with a finding for each that is wrong. */
 final class EntryCells {
-  private static final Pattern PLAIN_NUMBER =
-      Pattern.compile("[-+]?([0-9]+(\\.[0-9]*)?|\\.[0-9]+)([eE][-+]?[0-9]+)?");
-  private static final Pattern COMMA_NUMBER = Pattern.compile("[-+]?[0-9]+,[0-9]{1,2}|[-+]?[0-9]+,[0-9]{4,}");
-
   private final Findings findings;
 
   EntryCells(Findings findings) {
@@ -52,50 +47,25 @@ final class EntryCells {
     return Optional.of(entry.get(column).text()).filter(text -> !text.isEmpty());
   }
 
-  /**
-   * A number as a cell states it.
-   *
-   * @param value the number
-   * @param unit the unit written with it, as in {@code 0.5 %} or {@code 120 mm}
-   */
-  record Stated(double value, Optional<Unit> unit) {}
-
   /** A number with the unit that stands with it, where there is one; what is none is a finding. */
-  Optional<Stated> stated(EntryTable.Entry entry, String column) {
+  private Optional<StatedNumber> stated(EntryTable.Entry entry, String column) {
     EntryTable.Value value = entry.get(column);
     if (value.isBlank()) {
       return Optional.empty();
     }
-    if (value.kind() == CellKind.NUMBER) {
-      return Optional.of(new Stated(value.number(), Optional.empty()));
+    Optional<StatedNumber> stated = StatedNumber.of(value);
+    if (stated.isEmpty()) {
+      findings.add(
+          TestlogFinding.NOT_A_NUMBER,
+          value.where(),
+          "found " + show(value.kind(), value.text()) + "; expected a number");
+    } else if (stated.get().isText()) {
+      findings.add(
+          TestlogFinding.NUMBER_AS_TEXT,
+          value.where(),
+          "found the text '" + value.text() + "', read as " + stated.get().value());
     }
-    if (value.kind() == CellKind.TEXT) {
-      OptionalDouble read = numberIn(value.text());
-      if (read.isPresent()) {
-        findings.add(
-            TestlogFinding.NUMBER_AS_TEXT,
-            value.where(),
-            "found the text '" + value.text() + "', read as " + read.getAsDouble());
-        return Optional.of(new Stated(read.getAsDouble(), Optional.empty()));
-      }
-      Optional<Quantity> quantity = quantity(value);
-      if (quantity.isPresent()) {
-        return Optional.of(new Stated(quantity.get().value(), Optional.of(quantity.get().unit())));
-      }
-    }
-    findings.add(
-        TestlogFinding.NOT_A_NUMBER,
-        value.where(),
-        "found " + show(value.kind(), value.text()) + "; expected a number");
-    return Optional.empty();
-  }
-
-  private static Optional<Quantity> quantity(EntryTable.Value value) {
-    try {
-      return Optional.of(Quantity.parse(value.text()));
-    } catch (UnitException none) {
-      return Optional.empty();
-    }
+    return stated;
   }
 
   /**
@@ -103,7 +73,7 @@ final class EntryCells {
    * and 50 % is 0.5.
    */
   OptionalDouble number(EntryTable.Entry entry, String column) {
-    Optional<Stated> stated = stated(entry, column);
+    Optional<StatedNumber> stated = stated(entry, column);
     return stated.isEmpty()
         ? OptionalDouble.empty()
         : inSi(entry.get(column), stated.get(), Optional.of(Unit.ONE), List.of(Dimension.NUMBER), "number");
@@ -111,7 +81,7 @@ final class EntryCells {
 
   /** A share that is not negative and whose number counts percent where no unit stands with it. */
   OptionalDouble percent(EntryTable.Entry entry, String column) {
-    Optional<Stated> stated = stated(entry, column);
+    Optional<StatedNumber> stated = stated(entry, column);
     return stated.isEmpty()
         ? OptionalDouble.empty()
         : notNegative(
@@ -133,7 +103,7 @@ final class EntryCells {
       Unit otherwise,
       Dimension wanted,
       String what) {
-    Optional<Stated> stated = stated(entry, column);
+    Optional<StatedNumber> stated = stated(entry, column);
     if (stated.isEmpty()) {
       return OptionalDouble.empty();
     }
@@ -151,7 +121,7 @@ final class EntryCells {
       Optional<Unit> ofRow,
       List<Dimension> wanted,
       UnaryOperator<Unit> meaning) {
-    Optional<Stated> stated = stated(entry, column);
+    Optional<StatedNumber> stated = stated(entry, column);
     if (stated.isEmpty()) {
       return OptionalDouble.empty();
     }
@@ -174,7 +144,7 @@ final class EntryCells {
 
   private OptionalDouble inSi(
       EntryTable.Value value,
-      Stated stated,
+      StatedNumber stated,
       Optional<Unit> otherwise,
       List<Dimension> wanted,
       String what) {
@@ -183,7 +153,7 @@ final class EntryCells {
 
   private OptionalDouble inSi(
       EntryTable.Value value,
-      Stated stated,
+      StatedNumber stated,
       Optional<Unit> otherwise,
       List<Dimension> wanted,
       String what,
@@ -200,18 +170,6 @@ final class EntryCells {
     return unit.isEmpty()
         ? OptionalDouble.empty()
         : OptionalDouble.of(unit.get().toSi(stated.value()));
-  }
-
-  /** The number a text states, if it can mean only one. */
-  static OptionalDouble numberIn(String text) {
-    String plain = text.strip().replace('\u2212', '-');
-    if (PLAIN_NUMBER.matcher(plain).matches()) {
-      return OptionalDouble.of(Double.parseDouble(plain));
-    }
-    if (COMMA_NUMBER.matcher(plain).matches()) {
-      return OptionalDouble.of(Double.parseDouble(plain.replace(',', '.')));
-    }
-    return OptionalDouble.empty();
   }
 
   static String show(CellKind kind, String text) {

@@ -12,6 +12,7 @@ import java.util.Set;
 import java.util.stream.Collectors;
 import org.flexbound.document.CellKind;
 import org.flexbound.document.Row;
+import org.flexbound.document.StatedNumber;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.NearestWord;
@@ -306,7 +307,7 @@ final class HeaderSearch {
         String text = row.text(cell.index());
         if (kind == CellKind.NUMBER
             || kind == CellKind.ERROR
-            || EntryCells.numberIn(text).isPresent()
+            || StatedNumber.plain(text).isPresent()
             || layout.isNoReading(row, cell.index())) {
           return true;
         }

@@ -4,6 +4,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import org.flexbound.document.EntryTable;
+import org.flexbound.document.StatedNumber;
 import org.flexbound.finding.Findings;
 import org.flexbound.quantity.Dimension;
 import org.flexbound.quantity.Unit;
@@ -52,7 +53,7 @@ final class PlacesReader {
     if (at < 0) {
       return Optional.of(new Station.AtNode(value.text(), Vector.ZERO));
     }
-    OptionalDouble share = EntryCells.numberIn(value.text().substring(at + 1));
+    OptionalDouble share = StatedNumber.plain(value.text().substring(at + 1));
     if (share.isEmpty() || !(share.getAsDouble() >= 0 && share.getAsDouble() <= 1)) {
       findings.add(
           TestlogFinding.OUT_OF_RANGE,

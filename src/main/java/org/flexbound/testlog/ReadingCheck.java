@@ -4,6 +4,7 @@ import java.util.List;
 import java.util.Locale;
 import org.flexbound.document.CellKind;
 import org.flexbound.document.Row;
+import org.flexbound.document.StatedNumber;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
 
@@ -80,7 +81,7 @@ final class ReadingCheck {
       if (kind == CellKind.NUMBER && Double.isFinite(row.number(column))) {
         return true;
       }
-      if (kind == CellKind.TEXT && EntryCells.numberIn(row.text(column)).isPresent()) {
+      if (kind == CellKind.TEXT && StatedNumber.plain(row.text(column)).isPresent()) {
         if (asText++ == 0) {
           firstAsText = row.where(column);
         }

@@ -4,6 +4,7 @@ import java.util.Locale;
 import org.flexbound.document.CellKind;
 import org.flexbound.document.Row;
 import org.flexbound.document.Sheet;
+import org.flexbound.document.StatedNumber;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.Unit;
 
@@ -75,7 +76,7 @@ final class SheetReadings implements Readings {
       return row.number(column);
     }
     return kind == CellKind.TEXT
-        ? EntryCells.numberIn(row.text(column)).orElse(Double.NaN)
+        ? StatedNumber.plain(row.text(column)).orElse(Double.NaN)
         : Double.NaN;
   }
 
