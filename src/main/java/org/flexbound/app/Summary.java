@@ -62,6 +62,9 @@ final class Summary {
   }
 
   private void runs() {
+    if (results.runs().isEmpty()) {
+      return;
+    }
     heading("Runs");
     TextTable table =
         new TextTable().text("run").text("loads").text("verdict").number("steps").text("reasons");

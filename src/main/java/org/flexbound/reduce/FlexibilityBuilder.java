@@ -20,7 +20,6 @@ import org.flexbound.testlog.TestLog;
 final class FlexibilityBuilder {
   private final ReductionProblem problem;
   private final TestLog log;
-  private final RunPooling pooling;
   private final Findings findings;
   private final Map<String, Instrument> instruments = new LinkedHashMap<>();
   private final List<Gain> gains = new ArrayList<>();
@@ -28,10 +27,9 @@ final class FlexibilityBuilder {
   private final Map<String, Double> baseShares = new LinkedHashMap<>();
   private boolean calibrationIncluded = true;
 
-  FlexibilityBuilder(ReductionProblem problem, RunPooling pooling, Findings findings) {
+  FlexibilityBuilder(ReductionProblem problem, Findings findings) {
     this.problem = problem;
     this.log = problem.log();
-    this.pooling = pooling;
     this.findings = findings;
     log.instruments().forEach(instrument -> instruments.put(instrument.name(), instrument));
   }
@@ -44,11 +42,16 @@ final class FlexibilityBuilder {
     return baseShares;
   }
 
-  MeasuredFlexibility build() {
+  MeasuredFlexibility build(RunPooling pooling) {
     List<AbsoluteCoefficient> absolute = new ArrayList<>();
     for (RunPooling.Cell cell : pooling.cells()) {
-      absolute.add(absolute(cell));
+      absolute.add(absolute(cell, pooling));
     }
+    return build(absolute, pooling.degreesOfFreedom());
+  }
+
+  /** Takes out base motion and averages; the gains are those gathered so far. */
+  MeasuredFlexibility build(List<AbsoluteCoefficient> absolute, double scatterFreedom) {
     List<int[]> columns = new ArrayList<>();
     List<double[]> weights = new ArrayList<>();
     List<int[]> names = new ArrayList<>();
@@ -71,13 +74,13 @@ final class FlexibilityBuilder {
         log.loads(),
         absolute,
         gains,
-        pooling.degreesOfFreedom(),
+        scatterFreedom,
         map,
         CoefficientUncertainty.coefficients(
-            names.toArray(int[][]::new), absolute, gains, map, pooling.degreesOfFreedom()));
+            names.toArray(int[][]::new), absolute, gains, map, scatterFreedom));
   }
 
-  private AbsoluteCoefficient absolute(RunPooling.Cell cell) {
+  private AbsoluteCoefficient absolute(RunPooling.Cell cell, RunPooling pooling) {
     double mean = cell.mean();
     double span = loadSpan(cell);
     List<Integer> acting = new ArrayList<>();

@@ -24,6 +24,13 @@ public enum ReduceFinding implements FindingKind {
       Severity.WARNING,
       "Too few load steps for a slope.",
       "Take at least five steps up and five down (common practice)."),
+  /** Coefficients were stated in place of readings. */
+  STATED(
+      "RED-STATED",
+      Severity.WARNING,
+      "Coefficients that were reduced elsewhere were taken as they are stated.",
+      "Give the readings instead where there are any; else make sure that the stated uncertainties"
+          + " include all that is known."),
   /** Only one run and no stated repeatability. */
   ONE_RUN(
       "RED-ONE-RUN",

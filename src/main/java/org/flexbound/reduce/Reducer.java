@@ -29,6 +29,10 @@ public final class Reducer {
   public static Outcome<Reduction> reduce(ReductionProblem problem) {
     TestLog log = problem.log();
     Findings findings = new Findings();
+    if (!log.coefficients().isEmpty()) {
+      Reduction stated = new StatedReduction(problem, findings).reduce();
+      return Outcome.of(stated, findings.list());
+    }
     Map<String, Load> loads = new LinkedHashMap<>();
     log.loads().forEach(load -> loads.put(load.name(), load));
     Map<String, Double> resolutions = new HashMap<>();
@@ -67,8 +71,8 @@ public final class Reducer {
       return Outcome.none(findings.list());
     }
     RunPooling pooling = new RunPooling(log, slopes, findings);
-    FlexibilityBuilder builder = new FlexibilityBuilder(problem, pooling, findings);
-    MeasuredFlexibility flexibility = builder.build();
+    FlexibilityBuilder builder = new FlexibilityBuilder(problem, findings);
+    MeasuredFlexibility flexibility = builder.build(pooling);
     MatrixChecks checks =
         MatrixChecks.of(
             flexibility,

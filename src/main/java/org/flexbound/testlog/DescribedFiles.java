@@ -35,6 +35,10 @@ import org.flexbound.quantity.Units;
 final class DescribedFiles {
   private static final List<String> OF_TEXT = List.of("separator", "decimalSign", "encoding");
 
+  /** The keys of a table of entries that stands in a file of its own. */
+  static final List<String> OF_A_TABLE =
+      List.of("file", "sheet", "separator", "decimalSign", "encoding");
+
   private final InputFolder folder;
   private final JsonKeys keys;
   private final Findings findings;
@@ -55,6 +59,9 @@ final class DescribedFiles {
   /** The sheets that hold readings, in the order of the description. */
   List<ReadingsSource> sources(Json.Members top) {
     Optional<Json> readings = top.get(DescriptionKeys.READINGS);
+    if (readings.isEmpty() && top.get(DescriptionKeys.of(SheetLayout.COEFFICIENTS.name())).isPresent()) {
+      return List.of();
+    }
     if (readings.isEmpty()) {
       keys.absent(
           top.where(),
@@ -67,6 +74,27 @@ final class DescribedFiles {
       keys.members(item, "a file with readings").ifPresent(this::entry);
     }
     return named(sources);
+  }
+
+  /** A file or a sheet of one that holds a table of entries. */
+  Optional<Sheet> table(Json.Members entry) {
+    keys.refuseOthers(entry, OF_A_TABLE);
+    Optional<String> name = keys.text(entry, "file");
+    if (name.isEmpty()) {
+      keys.absent(entry.where(), "found no key 'file'; expected the name of a file");
+      return Optional.empty();
+    }
+    Json.Text file = new Json.Text(entry.get("file").orElse(entry).where(), name.get());
+    CsvLayout written = written(entry);
+    return folder
+        .resolve(file.text(), file.where(), findings)
+        .flatMap(path -> open(entry, path, file, written))
+        .flatMap(
+            sheets ->
+                keys.texts(entry, "sheet").stream()
+                    .findFirst()
+                    .map(wanted -> sheet(sheets, wanted, file))
+                    .orElseGet(() -> sheets.sheets().stream().findFirst()));
   }
 
   private void entry(Json.Members entry) {
@@ -94,11 +122,29 @@ final class DescribedFiles {
       CsvLayout written,
       ReadingsLayout layout,
       List<Json.Text> sheets) {
+    Optional<SheetFile> opened = open(entry, path, name, written);
+    if (opened.isEmpty()) {
+      return;
+    }
+    SheetFile file = opened.get();
+    boolean text = TableFile.isText(file);
+    if (text || sheets.isEmpty()) {
+      boolean only = file.sheets().size() == 1;
+      file.sheets().forEach(sheet -> source(sheet, name, layout, only));
+      return;
+    }
+    for (Json.Text wanted : sheets) {
+      sheet(file, wanted, name).ifPresent(sheet -> source(sheet, name, layout, true));
+    }
+  }
+
+  private Optional<SheetFile> open(
+      Json.Members entry, Path path, Json.Text name, CsvLayout written) {
     String shown = folder.shown(name.text());
     Outcome<SheetFile> opened = TableFile.open(path, shown, written, ReadLimits.USUAL);
     findings.addAll(opened.findings());
     if (opened.value().isEmpty()) {
-      return;
+      return Optional.empty();
     }
     inputs.add(new InputFile(shown, WorkbookLog.sha256(path)));
     SheetFile file = opened.value().get();
@@ -118,29 +164,25 @@ final class DescribedFiles {
                           + "', which is a "
                           + (text ? "text file without sheets" : "workbook and no text file")));
     }
-    if (text || sheets.isEmpty()) {
-      boolean only = file.sheets().size() == 1;
-      file.sheets().forEach(sheet -> source(sheet, name, layout, only));
-      return;
+    return Optional.of(file);
+  }
+
+  private Optional<Sheet> sheet(SheetFile file, Json.Text wanted, Json.Text name) {
+    Optional<Sheet> sheet = file.sheet(wanted.text());
+    if (sheet.isEmpty()) {
+      List<String> there = file.sheets().stream().map(Sheet::name).toList();
+      findings.add(
+          TestlogFinding.MISSING_SHEET,
+          wanted.where(),
+          "found no sheet '"
+              + wanted.text()
+              + "' in '"
+              + name.text()
+              + "'; it has "
+              + String.join(", ", there)
+              + NearestWord.question(wanted.text(), there));
     }
-    for (Json.Text wanted : sheets) {
-      Optional<Sheet> sheet = file.sheet(wanted.text());
-      if (sheet.isEmpty()) {
-        List<String> there = file.sheets().stream().map(Sheet::name).toList();
-        findings.add(
-            TestlogFinding.MISSING_SHEET,
-            wanted.where(),
-            "found no sheet '"
-                + wanted.text()
-                + "' in '"
-                + name.text()
-                + "'; it has "
-                + String.join(", ", there)
-                + NearestWord.question(wanted.text(), there));
-      } else {
-        source(sheet.get(), name, layout, true);
-      }
-    }
+    return sheet;
   }
 
   private void source(Sheet sheet, Json.Text name, ReadingsLayout layout, boolean expected) {

@@ -2,10 +2,8 @@ package org.flexbound.testlog;
 
 import java.nio.file.Path;
 import java.util.ArrayList;
-import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Optional;
-import java.util.Set;
 import org.flexbound.document.InputFolder;
 import org.flexbound.document.Json;
 import org.flexbound.document.JsonFile;
@@ -39,10 +37,15 @@ final class DescribedLog {
     DescribedFiles files =
         new DescribedFiles(InputFolder.of(path, shownName), keys, findings);
     List<ReadingsSource> sources = files.sources(top.get());
-    Set<InputFile> read = new LinkedHashSet<>(files.inputs());
-    inputs.addAll(read);
-    TestLog log =
-        new LogReader(new DescribedTables(top.get(), findings), sources, findings).log(inputs);
+    LogReader reader =
+        new LogReader(new DescribedTables(top.get(), files, findings), sources, findings);
+    TestLog log = reader.log(() -> inputs(files));
     return Outcome.of(log, findings.list());
+  }
+
+  /** The description and the files that were opened for it. */
+  private List<InputFile> inputs(DescribedFiles files) {
+    inputs.addAll(files.inputs());
+    return inputs;
   }
 }

@@ -18,9 +18,13 @@ import org.flexbound.finding.Where;
 final class DescribedTables implements LogTables {
   private final Json.Members top;
   private final JsonKeys keys;
+  private final DescribedFiles files;
+  private final Findings findings;
 
-  DescribedTables(Json.Members top, Findings findings) {
+  DescribedTables(Json.Members top, DescribedFiles files, Findings findings) {
     this.top = top;
+    this.files = files;
+    this.findings = findings;
     this.keys = new JsonKeys(findings);
   }
 
@@ -53,6 +57,15 @@ final class DescribedTables implements LogTables {
     return top.get(key(layout))
         .flatMap(
             value -> {
+              if (layout.equals(SheetLayout.COEFFICIENTS)
+                  && value instanceof Json.Members elsewhere) {
+                return files
+                    .table(elsewhere)
+                    .flatMap(
+                        sheet ->
+                            EntryTable.read(
+                                sheet, layout.required(), layout.optional(), findings));
+              }
               Rows rows = new Rows(layout);
               boolean sound =
                   layout.equals(SheetLayout.TEST)

@@ -25,6 +25,7 @@ final class DescriptionKeys {
           SheetLayout.INSTRUMENTS,
           SheetLayout.LOAD_POINTS,
           SheetLayout.GAUGES,
+          SheetLayout.COEFFICIENTS,
           SheetLayout.LIMITS);
 
   private DescriptionKeys() {}
@@ -88,6 +89,7 @@ final class DescriptionKeys {
         GAUGES,
         READINGS,
         of(SheetLayout.RUNS.name()),
+        of(SheetLayout.COEFFICIENTS.name()),
         of(SheetLayout.OPTIONS.name()),
         of(SheetLayout.LIMITS.name()));
   }

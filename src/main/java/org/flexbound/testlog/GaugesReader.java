@@ -34,10 +34,23 @@ final class GaugesReader {
   private final EntryCells cells;
   private final Findings findings;
   private final Unit length;
+  private final boolean stated;
   private final List<Claim> claims = new ArrayList<>();
 
+  /**
+   * A reader.
+   *
+   * @param length the unit of lengths that state none
+   * @param stated whether coefficients are stated in place of readings, so that there are no columns
+   */
   GaugesReader(
-      EntryTable table, PlacesReader places, EntryCells cells, Findings findings, Unit length) {
+      EntryTable table,
+      PlacesReader places,
+      EntryCells cells,
+      Findings findings,
+      Unit length,
+      boolean stated) {
+    this.stated = stated;
     this.table = table;
     this.places = places;
     this.cells = cells;
@@ -90,7 +103,8 @@ final class GaugesReader {
               case ROTATION -> "angle";
               case STRAIN -> "strain";
             });
-    Optional<String> column = cells.need(entry, "Column");
+    Optional<String> column =
+        stated ? Optional.of(EntryCells.text(entry, "Column")) : cells.need(entry, "Column");
     Optional<Vector> coordinates = places.coordinates(entry);
     Optional<Station> station = station(entry, coordinates);
     Optional<Station> second = places.station(entry.get("Node 2"));
@@ -103,7 +117,9 @@ final class GaugesReader {
     if (column.isEmpty() || station.isEmpty() || direction.isEmpty()) {
       return Optional.empty();
     }
-    claims.add(Claim.of(entry, name, false, column.get(), unit));
+    if (!stated) {
+      claims.add(Claim.of(entry, name, false, column.get(), unit));
+    }
     return Optional.of(
         new Gauge(
             name,

@@ -23,10 +23,23 @@ final class LoadsReader {
   private final EntryCells cells;
   private final Findings findings;
   private final double gravity;
+  private final boolean stated;
   private final List<Claim> claims = new ArrayList<>();
 
+  /**
+   * A reader.
+   *
+   * @param gravity the weight of a mass, m/s²
+   * @param stated whether coefficients are stated in place of readings, so that there are no columns
+   */
   LoadsReader(
-      EntryTable table, PlacesReader places, EntryCells cells, Findings findings, double gravity) {
+      EntryTable table,
+      PlacesReader places,
+      EntryCells cells,
+      Findings findings,
+      double gravity,
+      boolean stated) {
+    this.stated = stated;
     this.table = table;
     this.places = places;
     this.cells = cells;
@@ -69,7 +82,8 @@ final class LoadsReader {
                 + first.get("Column").where());
       }
     }
-    Optional<String> column = cells.need(first, "Column");
+    Optional<String> column =
+        stated ? Optional.of(EntryCells.text(first, "Column")) : cells.need(first, "Column");
     if (points.isEmpty() || column.isEmpty()) {
       return Optional.empty();
     }
@@ -98,7 +112,9 @@ final class LoadsReader {
                 unit,
                 PlacesReader.loadDimensions(moment),
                 stated -> weight(stated, gravity)));
-    claims.add(Claim.of(first, name, true, column.get(), unit));
+    if (!stated) {
+      claims.add(Claim.of(first, name, true, column.get(), unit));
+    }
     return Optional.of(
         new Load(
             name,

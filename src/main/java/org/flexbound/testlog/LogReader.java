@@ -7,7 +7,9 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.function.Supplier;
 import java.util.stream.Collectors;
+import org.flexbound.document.EntryTable;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.NearestWord;
@@ -19,6 +21,7 @@ import org.flexbound.setup.LimitSpec;
 import org.flexbound.setup.Load;
 import org.flexbound.setup.ReductionOptions;
 import org.flexbound.setup.SlopeFit;
+import org.flexbound.setup.StatedCoefficient;
 
 /** Makes a test log of tables of entries and sheets of readings; all problems come in one answer. */
 final class LogReader {
@@ -43,8 +46,8 @@ final class LogReader {
     this.cells = new EntryCells(findings);
   }
 
-  /** Reads the log; the files that were read are those given. */
-  TestLog log(List<InputFile> inputs) {
+  /** Reads the log; the files that were read are asked for at the end. */
+  TestLog log(Supplier<List<InputFile>> inputs) {
     TestInformation information = sheets.information();
     Unit length = sheets.lengthUnit();
     List<Instrument> instruments = sheets.instruments();
@@ -53,11 +56,14 @@ final class LogReader {
             .table(SheetLayout.OPTIONS)
             .map(table -> new OptionsReader(cells, findings).read(table))
             .orElse(ReductionOptions.USUAL);
+    Optional<EntryTable> coefficients =
+        sheets.table(SheetLayout.COEFFICIENTS).filter(table -> !table.entries().isEmpty());
+    boolean stated = coefficients.isPresent();
     List<Claim> claims = new ArrayList<>();
     List<Load> loads = new ArrayList<>();
     List<Gauge> gauges = new ArrayList<>();
     sheets
-        .need(SheetLayout.LOAD_POINTS)
+        .need(stated ? SheetLayout.LOAD_POINTS.without("Column") : SheetLayout.LOAD_POINTS)
         .ifPresent(
             table -> {
               LoadsReader reader =
@@ -66,12 +72,13 @@ final class LogReader {
                       new PlacesReader(table, length, cells, findings),
                       cells,
                       findings,
-                      options.localGravity());
+                      options.localGravity(),
+                      stated);
               loads.addAll(reader.read());
               claims.addAll(reader.claims());
             });
     sheets
-        .need(SheetLayout.GAUGES)
+        .need(stated ? SheetLayout.GAUGES.without("Column") : SheetLayout.GAUGES)
         .ifPresent(
             table -> {
               GaugesReader reader =
@@ -80,7 +87,8 @@ final class LogReader {
                       new PlacesReader(table, length, cells, findings),
                       cells,
                       findings,
-                      length);
+                      length,
+                      stated);
               gauges.addAll(reader.read());
               claims.addAll(reader.claims());
             });
@@ -100,7 +108,21 @@ final class LogReader {
                         + tables.name(SheetLayout.GAUGES));
               }
             });
-    List<Run> runs = runs(claims, options);
+    List<Run> runs = stated ? List.of() : runs(claims, options);
+    List<StatedCoefficient> given =
+        coefficients
+            .map(
+                table ->
+                    new CoefficientsReader(
+                            table, gauges, loads, options.statedRepeatability(), cells, findings)
+                        .read())
+            .orElse(List.of());
+    if (stated && !sources.isEmpty()) {
+      findings.add(
+          TestlogFinding.BOTH,
+          coefficients.get().where(),
+          "found coefficients in place of readings, but also " + sources.get(0).sheet().where());
+    }
     List<LimitSpec> limits =
         sheets
             .table(SheetLayout.LIMITS)
@@ -108,7 +130,7 @@ final class LogReader {
             .orElse(List.of());
     refuseLater(options, limits);
     return new TestLog(
-        information, instruments, loads, gauges, runs, options, limits, inputs);
+        information, instruments, loads, gauges, runs, options, limits, given, inputs.get());
   }
 
   /** What the format knows and the program does not do yet is refused, never passed over. */

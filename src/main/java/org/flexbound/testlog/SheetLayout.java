@@ -203,6 +203,36 @@ record SheetLayout(String name, List<Column> columns, String help) {
               may("Remark", "anything")),
           "Acceptance limits for a check.");
 
+  static final SheetLayout COEFFICIENTS =
+      new SheetLayout(
+          "Coefficients",
+          List.of(
+              need("Gauge", "a name of the gauges"),
+              need("Load", "a name of the load points"),
+              need("Value", "absolute coefficient: motion per load, base motion not taken out"),
+              may("Unit", "its unit, such as mm/kN"),
+              may("Standard uncertainty", "of the value (k=1), in its unit or in %"),
+              may("Degrees of freedom", "of the uncertainty; blank where it is well known"),
+              may("Remark", "anything")),
+          "Coefficients that were reduced elsewhere, in place of readings.");
+
+  /** All sheets that are known by name and hold entries. */
+  static List<SheetLayout> known() {
+    List<SheetLayout> known = new ArrayList<>(ALL);
+    known.add(COEFFICIENTS);
+    return known;
+  }
+
+  /** The same where a column may be missing. */
+  SheetLayout without(String column) {
+    return new SheetLayout(
+        name,
+        columns.stream()
+            .map(c -> c.name().equals(column) ? may(column, c.help()) : c)
+            .toList(),
+        help);
+  }
+
   /** All entry sheets, in the order of the template. */
   static final List<SheetLayout> ALL =
       List.of(TEST, INSTRUMENTS, LOAD_POINTS, GAUGES, RUNS, OPTIONS, LIMITS);

@@ -80,6 +80,12 @@ public enum TestlogFinding implements FindingKind {
       Severity.ERROR,
       "A readings sheet lacks a column that its run needs.",
       "Add the column, or correct its name where the load points, gauges and runs are described."),
+  /** Coefficients and readings. */
+  BOTH(
+      "LOG-BOTH",
+      Severity.ERROR,
+      "A log has both coefficients and sheets that may hold readings.",
+      "Keep one of the two: coefficients stand in place of readings."),
   /** Two rows may be the header. */
   HEADER_UNCERTAIN(
       "LOG-HEADER-UNCERTAIN",

@@ -38,7 +38,7 @@ public final class WorkbookLog {
     List<ReadingsSource> sources = new ArrayList<>();
     for (Sheet sheet : file.sheets()) {
       String key = HeaderText.key(sheet.name());
-      if (SheetLayout.ALL.stream().anyMatch(layout -> HeaderText.key(layout.name()).equals(key))) {
+      if (SheetLayout.known().stream().anyMatch(layout -> HeaderText.key(layout.name()).equals(key))) {
         sheet.notes().report(sheet.where(), findings);
       } else if (!key.equals("examples")) {
         sources.add(
@@ -46,7 +46,7 @@ public final class WorkbookLog {
       }
     }
     TestLog log =
-        new LogReader(new WorkbookTables(file, findings), sources, findings).log(List.of(input));
+        new LogReader(new WorkbookTables(file, findings), sources, findings).log(() -> List.of(input));
     return Outcome.of(log, findings.list());
   }
 

@@ -28,7 +28,10 @@ final class DescriptionSchema {
           "At",
           "Temperature",
           "Lower",
-          "Upper");
+          "Upper",
+          "Value",
+          "Standard uncertainty",
+          "Degrees of freedom");
 
   private DescriptionSchema() {}
 
@@ -50,6 +53,7 @@ final class DescriptionSchema {
     for (SheetLayout layout : DescriptionKeys.LISTS) {
       properties.put(DescriptionKeys.of(layout.name()), list(layout));
     }
+    properties.put("coefficients", coefficients());
     properties.put("readings", readings());
     properties.put("runs", list(SheetLayout.RUNS_IN_FILES));
     properties.put("options", options());
@@ -67,7 +71,11 @@ final class DescriptionSchema {
         "Says what the sheets of the load-test workbook say, and names the files, sheets and"
             + " columns in which the readings stand. File names are relative to the folder of the"
             + " description. A value with a unit may be a text such as \"0.5 mm\".");
-    schema.putAll(object(ordered, List.of("loadPoints", "gauges", "readings")));
+    schema.putAll(object(ordered, List.of("loadPoints", "gauges")));
+    schema.put(
+        "oneOf",
+        List.of(
+            Map.of("required", List.of("readings")), Map.of("required", List.of("coefficients"))));
     return schema;
   }
 
@@ -139,7 +147,8 @@ final class DescriptionSchema {
                 Map.of("type", "string")));
         continue;
       }
-      if (column.required()) {
+      // a log of coefficients has no columns of readings
+      if (column.required() && !column.name().equals("Column")) {
         required.add(key);
       }
       properties.put(key, column(column));
@@ -149,6 +158,18 @@ final class DescriptionSchema {
     map.put("description", layout.help());
     map.put("items", object(properties, required));
     return map;
+  }
+
+  private static Map<String, Object> coefficients() {
+    Map<String, Object> file = new LinkedHashMap<>();
+    DescribedFiles.OF_A_TABLE.forEach(
+        key -> file.put(key, reading(key, DescriptionKeys.OF_READINGS.get(key))));
+    Map<String, Object> elsewhere = object(file, List.of("file"));
+    elsewhere.put("description", "The file that holds the table.");
+    return described(
+        SheetLayout.COEFFICIENTS.help(),
+        "oneOf",
+        List.of(list(SheetLayout.COEFFICIENTS), elsewhere));
   }
 
   private static Map<String, Object> column(SheetLayout.Column column) {
