@@ -201,17 +201,11 @@ public record FrameModel(
   public Stiffness stiffness(Member member, Rigidity rigidity) {
     Material material = material(member.material());
     SectionProperties section = startSection(member);
-    double e = material.youngsModulus() * material.scale();
-    double g = material.shearModulus() * material.scale();
     double nominal =
-        switch (rigidity) {
-          case EA -> e * section.area();
-          case EI_Y -> e * section.iy();
-          case EI_Z -> e * section.iz();
-          case GJ -> g * section.j();
-          case GA_Y -> g * section.ay();
-          case GA_Z -> g * section.az();
-        };
+        section.stiffness(
+            rigidity,
+            material.youngsModulus() * material.scale(),
+            material.shearModulus() * material.scale());
     return member.factor(rigidity).of(new Stiffness(nominal));
   }
 

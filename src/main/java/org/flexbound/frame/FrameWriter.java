@@ -2,7 +2,7 @@ package org.flexbound.frame;
 
 import java.util.LinkedHashMap;
 import java.util.Map;
-import java.util.Optional;
+import java.util.function.Function;
 import org.flexbound.document.Json;
 import org.flexbound.finding.Where;
 
@@ -29,38 +29,42 @@ public final class FrameWriter {
   /** The tree of values with the factors that the model has. */
   static Json.Members tree(FrameModel model) {
     Map<String, Json> top = new LinkedHashMap<>(model.source().members());
-    model.materials().forEach(
-        (name, material) -> {
-          Map<String, Json> factors = new LinkedHashMap<>();
-          if (!material.factor().equals(StiffnessSetting.nominal())) {
-            factors.put("E", value(material.factor(), Measure.STRESS, SpringReader.RIGID));
-          }
-          set(top, "materials", name, factors);
-        });
-    model.members().forEach(
-        (name, member) -> {
-          Map<String, Json> factors = new LinkedHashMap<>();
-          member.factors().forEach(
-              (rigidity, setting) ->
-                  factors.put(
-                      rigidity.key(),
-                      value(setting, Measure.of(rigidity), SpringReader.RIGID)));
-          set(top, "members", name, factors);
-        });
-    model.joints().forEach(
-        (name, joint) ->
-            set(top, "joints", name, springs(joint.springs().factors(), SpringReader.RIGID)));
-    model.connections().forEach(
-        (name, connection) ->
-            set(top, "connections", name, springs(connection.factors(), SpringReader.RIGID)));
-    model.supports().forEach(
-        (name, support) ->
-            set(
-                top,
-                "supports",
-                name,
-                springs(support.springs().factors(), SpringReader.FIXED)));
+    set(
+        top,
+        "materials",
+        model.materials(),
+        material ->
+            material.factor().equals(StiffnessSetting.nominal())
+                ? Map.of()
+                : Map.of("E", value(material.factor(), Measure.STRESS, SpringReader.RIGID)));
+    set(top, "members", model.members(), FrameWriter::factors);
+    set(
+        top,
+        "joints",
+        model.joints(),
+        joint -> springs(joint.springs().factors(), SpringReader.RIGID));
+    set(
+        top,
+        "connections",
+        model.connections(),
+        connection -> springs(connection.factors(), SpringReader.RIGID));
+    set(
+        top,
+        "supports",
+        model.supports(),
+        support -> springs(support.springs().factors(), SpringReader.FIXED));
     return new Json.Members(model.source().where(), top);
+  }
+
+  private static Map<String, Json> factors(Member member) {
+    Map<String, Json> factors = new LinkedHashMap<>();
+    member
+        .factors()
+        .forEach(
+            (rigidity, setting) ->
+                factors.put(
+                    rigidity.key(), value(setting, Measure.of(rigidity), SpringReader.RIGID)));
+    return factors;
   }
 
   private static Map<String, Json> springs(
@@ -85,25 +89,32 @@ public final class FrameWriter {
         Double.isInfinite(stiffness) ? rigid : stiffness + " " + measure.siSymbol());
   }
 
-  private static void set(
-      Map<String, Json> top, String table, String name, Map<String, Json> factors) {
+  /** Sets the factors of all entries of a table. */
+  private static <T> void set(
+      Map<String, Json> top, String table, Map<String, T> parts, Function<T, Map<String, Json>> of) {
     if (!(top.get(table) instanceof Json.Members members)) {
       return;
     }
-    Optional<Json> entry = members.get(name);
-    if (entry.isEmpty() || !(entry.get() instanceof Json.Members fields)) {
-      return;
+    Map<String, Json> all = new LinkedHashMap<>(members.members());
+    parts.forEach(
+        (name, part) -> {
+          if (all.get(name) instanceof Json.Members fields) {
+            all.put(name, withFactors(fields, of.apply(part)));
+          }
+        });
+    top.put(table, new Json.Members(members.where(), all));
+  }
+
+  private static Json.Members withFactors(Json.Members entry, Map<String, Json> factors) {
+    if (factors.isEmpty() && entry.get(FACTORS).isEmpty()) {
+      return entry;
     }
-    Map<String, Json> changed = new LinkedHashMap<>(fields.members());
+    Map<String, Json> changed = new LinkedHashMap<>(entry.members());
     if (factors.isEmpty()) {
-      if (changed.remove(FACTORS) == null) {
-        return;
-      }
+      changed.remove(FACTORS);
     } else {
       changed.put(FACTORS, new Json.Members(Where.nowhere(), factors));
     }
-    Map<String, Json> all = new LinkedHashMap<>(members.members());
-    all.put(name, new Json.Members(fields.where(), changed));
-    top.put(table, new Json.Members(members.where(), all));
+    return new Json.Members(entry.where(), changed);
   }
 }

@@ -48,4 +48,23 @@ public record SectionProperties(
   public boolean hasOffsetShearCentre() {
     return shearCentreY != 0 || shearCentreZ != 0;
   }
+
+  /**
+   * A stiffness of a member of this section.
+   *
+   * @param rigidity which
+   * @param youngsModulus E, Pa
+   * @param shearModulus G, Pa
+   * @return N or N·m²; infinite where there is no shear deformation
+   */
+  public double stiffness(Rigidity rigidity, double youngsModulus, double shearModulus) {
+    return switch (rigidity) {
+      case EA -> youngsModulus * area;
+      case EI_Y -> youngsModulus * iy;
+      case EI_Z -> youngsModulus * iz;
+      case GJ -> shearModulus * j;
+      case GA_Y -> shearModulus * ay;
+      case GA_Z -> shearModulus * az;
+    };
+  }
 }

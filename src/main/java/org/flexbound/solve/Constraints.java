@@ -114,6 +114,28 @@ final class Constraints {
     }
   }
 
+  /**
+   * What a combination of freedoms comes to in terms of imposed gaps, where the constraints leave
+   * nothing else of it.
+   *
+   * @param row coefficients by freedom
+   * @return coefficients by gap, numbered from 0
+   */
+  NavigableMap<Integer, Double> inGaps(Map<Integer, Double> row) {
+    NavigableMap<Integer, Double> result = new TreeMap<>();
+    row.forEach(
+        (freedom, factor) -> {
+          NavigableMap<Integer, Double> known = eliminated.get(freedom);
+          if (known != null) {
+            known
+                .tailMap(freedoms, true)
+                .forEach((gap, c) -> result.merge(gap - freedoms, c * factor, Double::sum));
+          }
+        });
+    result.values().removeIf(c -> Math.abs(c) < NOTHING_NEW);
+    return result;
+  }
+
   /** Whether a freedom has been taken out. */
   boolean isEliminated(int freedom) {
     return eliminated.containsKey(freedom);

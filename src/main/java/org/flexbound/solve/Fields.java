@@ -1,7 +1,5 @@
 package org.flexbound.solve;
 
-import org.ejml.data.DMatrixRMaj;
-import org.ejml.dense.row.CommonOps_DDRM;
 import org.flexbound.sparse.NumericFactor;
 import org.flexbound.sparse.SymmetricMatrix;
 
@@ -81,7 +79,7 @@ final class Fields {
     Transformation t = structure.transformation();
     int n = t.unknowns();
     int size = t.freedoms();
-    int gapCount = structure.gaps().size();
+    int gapCount = t.gaps();
     int count = columns.length + gapCount;
     double[] rhs = new double[Math.multiplyExact(n, count)];
     double[] forces = new double[size];
@@ -179,23 +177,18 @@ final class Fields {
     Transformation t = structure.transformation();
     int size = t.freedoms();
     int n = t.unknowns();
-    int gaps = structure.gaps().size();
+    int gaps = t.gaps();
     double[] fields = new double[Math.multiplyExact(size, gaps)];
-    DMatrixRMaj s = new DMatrixRMaj(gaps, gaps);
-    double[] root = new double[gaps];
+    double[][] s = new double[gaps][gaps];
     for (int g = 0; g < gaps; g++) {
       t.expand(solution, (columns.length + g) * n, fields, g * size);
       t.addGap(g, fields, g * size);
       double[] forces = nodalForces(structure, state, fields, g);
       for (int h = 0; h < gaps; h++) {
-        s.set(h, g, t.reduceToGap(forces, 0, h));
+        s[h][g] = t.reduceToGap(forces, 0, h);
       }
-      root[g] = Math.sqrt(1 / state.stiffness()[structure.gaps().get(g).slot()]);
     }
-    // (I + D S D) y = D N, D the root of the compliances: symmetric, and regular where D is zero.
-    DMatrixRMaj matrix = new DMatrixRMaj(gaps, gaps);
-    DMatrixRMaj right = new DMatrixRMaj(gaps, columns.length);
-    double[][] rigid = new double[columns.length][gaps];
+    double[][] closed = new double[columns.length][gaps];
     double[] forces = new double[size];
     for (int c = 0; c < columns.length; c++) {
       java.util.Arrays.fill(forces, 0);
@@ -205,37 +198,19 @@ final class Fields {
         for (int f = 0; f < size; f++) {
           sum += forces[f] * fields[g * size + f];
         }
-        rigid[c][g] = sum;
-        right.set(g, c, root[g] * sum);
+        closed[c][g] = sum;
       }
     }
-    for (int g = 0; g < gaps; g++) {
-      for (int h = 0; h < gaps; h++) {
-        matrix.set(g, h, (g == h ? 1 : 0) + root[g] * (s.get(g, h) + s.get(h, g)) / 2 * root[h]);
-      }
-    }
-    DMatrixRMaj y = new DMatrixRMaj(gaps, columns.length);
-    if (!CommonOps_DDRM.solve(matrix, right, y)) {
-      throw new ArithmeticException("the gaps of rigid components cannot be worked out");
-    }
-    double[][] result = new double[columns.length][gaps];
+    GapOpening opening = GapOpening.of(structure.gaps(), state.stiffness(), s, closed);
     for (int c = 0; c < columns.length; c++) {
       for (int g = 0; g < gaps; g++) {
-        double opening = root[g] * y.get(g, c);
+        double opened = opening.openings()[c][g];
         for (int f = 0; f < size; f++) {
-          motions[c * size + f] += opening * fields[g * size + f];
+          motions[c * size + f] += opened * fields[g * size + f];
         }
-        double sum = rigid[c][g];
-        for (int h = 0; h < gaps; h++) {
-          sum -= (s.get(g, h) + s.get(h, g)) / 2 * root[h] * y.get(h, c);
-        }
-        // Where the component is soft the force follows from the opening without cancellation.
-        result[c][g] = root[g] > 0 && root[g] * root[g] * s.get(g, g) > 1
-            ? y.get(g, c) / root[g]
-            : sum;
       }
     }
-    return result;
+    return opening.forces();
   }
 
   int size() {

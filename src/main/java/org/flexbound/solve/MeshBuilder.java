@@ -279,15 +279,7 @@ final class MeshBuilder {
     double g = material.shearModulus() * material.scale();
     StiffnessPath ofMaterial = new StiffnessPath(Group.MATERIALS, material.name(), "E");
     for (Rigidity rigidity : Rigidity.values()) {
-      double nominal =
-          switch (rigidity) {
-            case EA -> e * section.area();
-            case EI_Y -> e * section.iy();
-            case EI_Z -> e * section.iz();
-            case GJ -> g * section.j();
-            case GA_Y -> g * section.ay();
-            case GA_Z -> g * section.az();
-          };
+      double nominal = section.stiffness(rigidity, e, g);
       StiffnessPath path = StiffnessPath.of(member.name(), rigidity);
       StiffnessSetting factor = member.factor(rigidity);
       int slot = slots.add(path, factor.of(new Stiffness(nominal)).value());

@@ -32,8 +32,10 @@ final class Structure {
    * @param spring the index of the spring element
    * @param component which of its components
    * @param slot its stiffness
+   * @param follows of a gap that can only open as others do: its opening by theirs; empty for one
+   *     that opens by itself
    */
-  record Gap(int spring, int component, int slot) {}
+  record Gap(int spring, int component, int slot, Map<Integer, Double> follows) {}
 
   private Structure(
       Mesh mesh,
@@ -76,6 +78,7 @@ final class Structure {
     int freedoms = mesh.freedoms();
     Constraints constraints = new Constraints(freedoms, length);
     List<Gap> gaps = new ArrayList<>();
+    List<Gap> following = new ArrayList<>();
     List<Element> elements = new ArrayList<>(mesh.members());
     for (Map<Integer, Double> row : held) {
       constraints.add(row, row.keySet().iterator().next());
@@ -96,13 +99,20 @@ final class Structure {
           }
           constrained[s][c] = true;
           Map<Integer, Double> row = row(spring, c);
-          if (open) {
-            row.put(freedoms + gaps.size(), -1.0);
+          if (!open) {
+            again |= !constraints.add(row, spring.freedom(spring.freedoms() - 6 + c));
+            continue;
           }
-          boolean added = constraints.add(row, spring.freedom(spring.freedoms() - 6 + c));
-          again |= !added;
-          if (open && added) {
-            gaps.add(new Gap(s, c, slot));
+          Map<Integer, Double> opened = new HashMap<>(row);
+          opened.put(freedoms + gaps.size(), -1.0);
+          if (constraints.add(opened, spring.freedom(spring.freedoms() - 6 + c))) {
+            gaps.add(new Gap(s, c, slot, Map.of()));
+          } else {
+            again = true;
+            Map<Integer, Double> follows = constraints.inGaps(row);
+            if (!follows.isEmpty()) {
+              following.add(new Gap(s, c, slot, follows));
+            }
           }
         }
         if (again) {
@@ -117,8 +127,9 @@ final class Structure {
       }
     }
     elements.addAll(mesh.bodies());
-    return new Structure(
-        mesh, elements, gaps, constraints.transformation(gaps.size()), settings);
+    Transformation transformation = constraints.transformation(gaps.size());
+    gaps.addAll(following);
+    return new Structure(mesh, elements, gaps, transformation, settings);
   }
 
 
@@ -196,6 +207,7 @@ final class Structure {
     return elements;
   }
 
+  /** Those that open by themselves first, then those that follow. */
   List<Gap> gaps() {
     return gaps;
   }
