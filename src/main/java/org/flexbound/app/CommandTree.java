@@ -20,7 +20,7 @@ final class CommandTree {
         .addSubcommand("check", LaterCommand.make("compare a test with its acceptance limits"))
         .addSubcommand("recheck", LaterCommand.make("compare a test with an earlier baseline"))
         .addSubcommand("trend", LaterCommand.make("show how a fixture changed over its tests"))
-        .addSubcommand("convert", LaterCommand.make("turn a model from JSON into a workbook or back"))
+        .addSubcommand("convert", new ConvertCommand(terminal))
         .addSubcommand("completion", new CompletionCommand(terminal));
     return root;
   }

@@ -78,6 +78,21 @@ public enum FrameFinding implements FindingKind {
       Severity.NOTE,
       "Shear areas of a section come from the shear flow of its thin walls.",
       "State Ay and Az if others are wanted."),
+  /** A row of a workbook that is there already. */
+  STATED_TWICE(
+      Severity.ERROR,
+      "A workbook states an entry of the model twice.",
+      "Keep one of the rows, or give the other a name of its own."),
+  /** A sheet without a meaning. */
+  SHEET_NOT_READ(
+      Severity.WARNING,
+      "A sheet of a model workbook has no name of a model's key and is not read.",
+      "Correct its name, or call it Examples."),
+  /** What a cell cannot hold. */
+  NOT_IN_WORKBOOK(
+      Severity.WARNING,
+      "Something of the model file has no place in a workbook.",
+      "Keep the JSON file where it matters."),
   /** An entry that nothing uses. */
   UNUSED(
       Severity.NOTE,

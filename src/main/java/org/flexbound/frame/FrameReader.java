@@ -4,11 +4,14 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import org.flexbound.document.Json;
 import org.flexbound.document.JsonFile;
+import org.flexbound.document.SheetFile;
+import org.flexbound.document.WorkbookFile;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.quantity.Dimension;
@@ -44,14 +47,45 @@ public final class FrameReader {
   private FrameReader() {}
 
   /**
-   * Reads a model from a JSON file.
+   * Reads a model from a JSON file, or from a workbook where the file's name ends as one.
    *
    * @param file where it lies
    * @param shownName its name in messages
    * @return the model as far as it could be made out, with all findings
    */
   public static Outcome<FrameModel> read(Path file, String shownName) {
-    return JsonFile.read(file, shownName).then(FrameReader::read);
+    if (!isWorkbook(file)) {
+      return JsonFile.read(file, shownName).then(FrameReader::read);
+    }
+    return WorkbookFile.open(file, shownName)
+        .then(
+            sheets -> {
+              try (SheetFile open = sheets) {
+                return read(open);
+              }
+            });
+  }
+
+  /**
+   * Whether a file's name ends as that of a workbook.
+   *
+   * @param file the file
+   * @return true for .xlsx, .xlsm and .xls
+   */
+  public static boolean isWorkbook(Path file) {
+    String name = String.valueOf(file.getFileName()).toLowerCase(Locale.ROOT);
+    return name.endsWith(".xlsx") || name.endsWith(".xlsm") || name.endsWith(".xls");
+  }
+
+  /**
+   * Reads a model from a workbook: one sheet for each key of a model file, see {@link FrameWorkbook}.
+   *
+   * @param sheets the workbook, not closed here
+   * @return the model as far as it could be made out, with all findings by sheet and cell
+   */
+  public static Outcome<FrameModel> read(SheetFile sheets) {
+    FrameReader reader = new FrameReader();
+    return reader.model(new FrameWorkbookReader(sheets, reader.findings).read());
   }
 
   /**

@@ -63,6 +63,25 @@ enum Measure {
     return exponent < 0 ? 1 / result : result;
   }
 
+  /** The unit that the declared units make, as a header states it; empty for a number. */
+  String declaredSymbol(DeclaredUnits units) {
+    String above = "";
+    String below = "";
+    String[] symbols = {
+      units.force().symbol(), units.mass().symbol(), units.length().symbol(), units.angle().symbol()
+    };
+    int[] powers = {force, mass, length, angle};
+    for (int i = 0; i < symbols.length; i++) {
+      String part = symbols[i] + (Math.abs(powers[i]) > 1 ? "^" + Math.abs(powers[i]) : "");
+      if (powers[i] > 0) {
+        above += (above.isEmpty() ? "" : "·") + part;
+      } else if (powers[i] < 0) {
+        below += "/" + part;
+      }
+    }
+    return above + below;
+  }
+
   /** The unit in which a stiffness is written where the user stated none. */
   String siSymbol() {
     return switch (this) {

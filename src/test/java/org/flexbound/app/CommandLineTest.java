@@ -52,7 +52,7 @@ class CommandLineTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"check", "recheck", "trend", "convert"})
+  @ValueSource(strings = {"check", "recheck", "trend"})
   void whatIsNotMadeYetIsRefusedByNameAndNotIgnored(String command) {
     assertThat(run(command, "one", "--two", "three")).isEqualTo(2);
     assertThat(err.toString()).contains("'" + command + "'").contains("not supported yet");

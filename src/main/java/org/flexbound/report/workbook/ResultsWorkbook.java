@@ -1,17 +1,15 @@
 package org.flexbound.report.workbook;
 
-import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
-import java.time.Instant;
 import java.util.ArrayList;
-import java.util.Date;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import org.apache.poi.ooxml.POIXMLProperties;
 import org.apache.poi.xssf.usermodel.XSSFName;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
+import org.flexbound.document.WorkbookBytes;
 import org.flexbound.report.Program;
 import org.flexbound.report.UnitSystem;
 import org.flexbound.report.results.Coefficient;
@@ -63,11 +61,7 @@ public final class ResultsWorkbook {
       POIXMLProperties.CoreProperties core = workbook.getProperties().getCoreProperties();
       core.setTitle(results.title());
       core.setCreator(Program.NAME);
-      // The same results give the same bytes: no clock.
-      core.setCreated(Optional.of(Date.from(Instant.EPOCH)));
-      ByteArrayOutputStream bytes = new ByteArrayOutputStream();
-      workbook.write(bytes);
-      return bytes.toByteArray();
+      return WorkbookBytes.of(workbook);
     } catch (IOException impossible) {
       throw new UncheckedIOException("the workbook could not be put together", impossible);
     }
