@@ -18,6 +18,7 @@ import org.flexbound.finding.Where;
 import org.flexbound.quantity.Unit;
 import org.flexbound.quantity.UnitException;
 import org.flexbound.quantity.Units;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Makes of a workbook the tree of values that a model file would hold; every value knows its cell, so
@@ -158,7 +159,7 @@ final class FrameWorkbookReader {
       } else if (layout.holdsMatrices() && !row.get(ModelSheet.MATRIX_ROW).isBlank()) {
         matrices
             .computeIfAbsent(name.text(), n -> new Matrix(name.where(), new TreeMap<>()))
-            .add(row, layout, this, otherUnits);
+            .add(row, this, otherUnits);
       } else if (result.containsKey(name.text())) {
         twice(name.where(), name.text());
       } else {
@@ -277,11 +278,7 @@ final class FrameWorkbookReader {
 
   /** The rows of a joint's full matrix. */
   private record Matrix(Where where, TreeMap<Integer, Json> rows) {
-    void add(
-        EntryTable.Entry row,
-        ModelSheet layout,
-        FrameWorkbookReader reader,
-        Map<String, Unit> otherUnits) {
+    void add(EntryTable.Entry row, FrameWorkbookReader reader, Map<String, Unit> otherUnits) {
       EntryTable.Value which = row.get(ModelSheet.MATRIX_ROW);
       int index = SpringReader.keys().indexOf(which.text().toLowerCase(Locale.ROOT));
       if (index < 0) {
@@ -318,7 +315,7 @@ final class FrameWorkbookReader {
     }
 
     /** The entry of the joint with the matrix; its factors stand in a row of their own. */
-    Json into(org.flexbound.document.@org.jspecify.annotations.Nullable Json own, FrameWorkbookReader reader) {
+    Json into(@Nullable Json own, FrameWorkbookReader reader) {
       if (rows.size() != 6) {
         reader.findings.add(
             FrameFinding.MISSING_KEY,

@@ -13,6 +13,7 @@ import java.util.Map;
 import java.util.function.Consumer;
 import org.apache.poi.ss.usermodel.Sheet;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
+import org.flexbound.document.EntryTable;
 import org.flexbound.document.Json;
 import org.flexbound.document.JsonFile;
 import org.flexbound.finding.Finding;
@@ -129,7 +130,7 @@ class FrameWorkbookTest {
 
   private static void set(Sheet sheet, int row, String header, Object value) {
     for (int c = 0; c < sheet.getRow(0).getLastCellNum(); c++) {
-      if (sheet.getRow(0).getCell(c).getStringCellValue().split(" \\[")[0].equals(header)) {
+      if (EntryTable.nameAndUnit(sheet.getRow(0).getCell(c).getStringCellValue())[0].equals(header)) {
         org.apache.poi.ss.usermodel.Row line = sheet.getRow(row);
         if (line == null) {
           line = sheet.createRow(row);
