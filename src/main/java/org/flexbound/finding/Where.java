@@ -118,6 +118,34 @@ public record Where(
   }
 
   /**
+   * The same column over some rows, where this is a cell of a sheet or a line of a text file;
+   * otherwise this place itself.
+   *
+   * @param first the first row, from 1
+   * @param last the last row
+   * @return e.g. {@code C4:C19}
+   */
+  public Where rows(int first, int last) {
+    if (cells.isPresent()) {
+      String column = cells.get().replaceFirst("[0-9:].*$", "");
+      String range =
+          column.isEmpty() ? cells.get() : column + first + (last > first ? ":" + column + last : "");
+      return new Where(file, sheet, Optional.of(range), path, line);
+    }
+    return line.isPresent() ? new Where(file, sheet, cells, path, OptionalInt.of(first)) : this;
+  }
+
+  /**
+   * The row of the cell, or the line.
+   *
+   * @return the first row named, from 1; empty where the place has none
+   */
+  public OptionalInt row() {
+    String digits = cells.orElse("").replaceFirst("^[A-Z]+", "").replaceFirst(":.*$", "");
+    return digits.matches("[0-9]{1,9}") ? OptionalInt.of(Integer.parseInt(digits)) : line;
+  }
+
+  /**
    * The place as a reader would say it, e.g. {@code log.xlsx, sheet Gauges, cell C4}; empty for no
    * place.
    */

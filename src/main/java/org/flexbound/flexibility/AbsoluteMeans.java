@@ -61,6 +61,24 @@ final class AbsoluteMeans {
     return result;
   }
 
+  /** The same, were one gauge's readings a factor larger under one load. */
+  AbsoluteMeans scaled(int gauge, int load, double factor) {
+    AbsoluteMeans result = new AbsoluteMeans(this);
+    Combination own = byPlace.get(key(gauge, load));
+    if (own != null) {
+      result.put(gauge, load, new Combination.Sum().add(own, factor).made());
+    }
+    return result;
+  }
+
+  /** The same, were two gauges' columns exchanged under one load. */
+  AbsoluteMeans exchanged(int gauge, int other, int load) {
+    AbsoluteMeans result = new AbsoluteMeans(this);
+    result.put(gauge, load, byPlace.get(key(other, load)));
+    result.put(other, load, byPlace.get(key(gauge, load)));
+    return result;
+  }
+
   /** The same, had a load acted with a share of another load along with it, which is taken off. */
   AbsoluteMeans without(int load, int other, double share) {
     AbsoluteMeans result = new AbsoluteMeans(this);

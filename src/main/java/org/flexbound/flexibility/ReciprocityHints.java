@@ -19,6 +19,9 @@ final class ReciprocityHints {
   /** More points than this are not searched: the gain pattern stands for them. */
   private static final int MOST_POINTS = 24;
 
+  /** With more points than this, faults under one load only are not searched. */
+  private static final int MOST_SINGLE = 10;
+
   /** A guess must take away at least this share of the misfit. */
   private static final double TAKEN = 0.75;
 
@@ -39,7 +42,7 @@ final class ReciprocityHints {
 
   /** A guess with what it would leave. */
   private record Guess(
-      Hint.Kind kind, List<Integer> gauges, String what, String detail, Score score) {}
+      Optional<Hint.Kind> kind, List<Integer> gauges, String what, String detail, Score score) {}
 
   /** Sum of z² of pairs and broken bounds, and over how many pairs. */
   private record Score(double misfit, int pairs) {}
@@ -77,13 +80,17 @@ final class ReciprocityHints {
       guessOf(point, guesses);
     }
     exchanged(guesses);
+    if (points.size() <= MOST_SINGLE) {
+      underOneLoad(guesses);
+    }
     offLine(guesses);
     guesses.removeIf(guess -> guess.score().pairs() < before.pairs());
     guesses.sort(Comparator.comparingDouble(guess -> guess.score().misfit()));
-    if (guesses.isEmpty()) {
+    Optional<Guess> first = guesses.stream().filter(g -> g.kind().isPresent()).findFirst();
+    if (first.isEmpty()) {
       return List.of();
     }
-    Guess best = guesses.get(0);
+    Guess best = first.get();
     double after = best.score().misfit();
     int freedom = Math.max(1, before.pairs());
     boolean good =
@@ -92,9 +99,12 @@ final class ReciprocityHints {
                 > LEVEL;
     List<Guess> ties =
         guesses.stream()
+            .filter(g -> g.kind().isPresent() || best.kind().equals(Optional.of(Hint.Kind.OFF_LINE)))
             .filter(guess -> guess.score().misfit() < after + GainPattern.CLEARLY_BETTER)
             .toList();
-    boolean one = ties.stream().allMatch(g -> g.kind() == best.kind()) && ties.size() <= 2;
+    boolean one =
+        ties.stream().allMatch(g -> g.kind().equals(best.kind()))
+            && ties.stream().map(g -> g.gauges().stream().sorted().toList()).distinct().count() <= 2;
     return good && one ? List.of(told(best, ties, before.misfit())) : List.of();
   }
 
@@ -106,7 +116,7 @@ final class ReciprocityHints {
       gauges.addAll(ties.get(1).gauges());
     }
     return new Hint(
-        best.kind(),
+        best.kind().orElseThrow(),
         gauges.stream().distinct().toList(),
         what,
         String.format(
@@ -125,18 +135,19 @@ final class ReciprocityHints {
     String load = point.loadName(means);
     guesses.add(
         new Guess(
-            Hint.Kind.REVERSED,
+            Optional.of(Hint.Kind.REVERSED),
             List.of(gauge),
             "gauge '" + name + "' or load '" + load + "' reversed",
             "the sign of '" + name + "' turned",
             score(means.scaled(gauge, -1))));
+    freeGain(point, gauge, guesses);
     for (UnitFactor factor : UnitFactor.USUAL) {
       for (boolean large : new boolean[] {true, false}) {
         double by = large ? 1 / factor.value() : factor.value();
         String text = String.format(Locale.ROOT, "%.4g", factor.value());
         guesses.add(
             new Guess(
-                Hint.Kind.UNIT,
+                Optional.of(Hint.Kind.UNIT),
                 List.of(gauge),
                 "gauge '" + name + "' " + text + " times too " + (large ? "large" : "small")
                     + ", or load '" + load + "' so much too " + (large ? "small" : "large")
@@ -144,6 +155,41 @@ final class ReciprocityHints {
                 "'" + name + "' " + (large ? "divided" : "multiplied") + " by " + text,
                 score(means.scaled(gauge, by))));
       }
+    }
+  }
+
+  /** Any factor at all: told by the gain pattern, here only to stand against a load off its line. */
+  private void freeGain(CollocatedPoint point, int gauge, List<Guess> guesses) {
+    double sum = 0;
+    double weights = 0;
+    for (CollocatedPoint other : points) {
+      Optional<Combination> own = point.under(other.load(), means);
+      Optional<Combination> reciprocal = other.under(point.load(), means);
+      if (other.load() == point.load()
+          || own.isEmpty()
+          || reciprocal.isEmpty()
+          || !GainPattern.isClear(own.get(), means)
+          || !GainPattern.isClear(reciprocal.get(), means)) {
+        continue;
+      }
+      double a = means.value(own.get());
+      double b = means.value(reciprocal.get());
+      Combination logarithm =
+          new Combination.Sum().add(own.get(), 1 / a).add(reciprocal.get(), -1 / b).made();
+      double variance = means.covariance(logarithm, logarithm);
+      if (variance > 0) {
+        sum += Math.log(Math.abs(b / a)) / variance;
+        weights += 1 / variance;
+      }
+    }
+    if (weights > 0) {
+      guesses.add(
+          new Guess(
+              Optional.empty(),
+              List.of(gauge),
+              "",
+              "",
+              score(means.scaled(gauge, Math.exp(sum / weights)))));
     }
   }
 
@@ -160,11 +206,63 @@ final class ReciprocityHints {
           String names = "'" + gauges.get(h).name() + "' and '" + gauges.get(g).name() + "'";
           guesses.add(
               new Guess(
-                  Hint.Kind.EXCHANGED,
+                  Optional.of(Hint.Kind.EXCHANGED),
                   List.of(h, g),
                   "the columns of " + names + " (or of the loads there) exchanged",
                   names + " exchanged",
                   score(means.exchanged(h, g))));
+        }
+      }
+    }
+  }
+
+  /** The same faults in the runs of one load only. */
+  private void underOneLoad(List<Guess> guesses) {
+    List<Gauge> gauges = means.measured().gauges();
+    for (CollocatedPoint point : points) {
+      int gauge = point.gauges().get(0);
+      String name = "'" + point.gaugeName(means) + "'";
+      for (CollocatedPoint loaded : points) {
+        int load = loaded.load();
+        if (!means.has(gauge, load)) {
+          continue;
+        }
+        String under = " under load '" + loaded.loadName(means) + "' only";
+        guesses.add(
+            new Guess(
+                Optional.of(Hint.Kind.REVERSED),
+                List.of(gauge),
+                "gauge " + name + " reversed" + under,
+                "the sign of " + name + " turned" + under,
+                score(means.scaled(gauge, load, -1))));
+        for (UnitFactor factor : UnitFactor.USUAL) {
+          for (boolean large : new boolean[] {true, false}) {
+            String text = String.format(Locale.ROOT, "%.4g", factor.value());
+            guesses.add(
+                new Guess(
+                    Optional.of(Hint.Kind.UNIT),
+                    List.of(gauge),
+                    "gauge " + name + " " + text + " times too " + (large ? "large" : "small") + under
+                        + " (" + factor.words() + ")",
+                    name + " " + (large ? "divided" : "multiplied") + " by " + text + under,
+                    score(
+                        means.scaled(
+                            gauge, load, large ? 1 / factor.value() : factor.value()))));
+          }
+        }
+        for (int other = 0; other < gauges.size(); other++) {
+          if (other != gauge
+              && means.has(other, load)
+              && gauges.get(other).kind() == gauges.get(gauge).kind()) {
+            String names = name + " and '" + gauges.get(other).name() + "'";
+            guesses.add(
+                new Guess(
+                    Optional.of(Hint.Kind.EXCHANGED),
+                    List.of(gauge, other),
+                    "the columns of " + names + " exchanged" + under,
+                    names + " exchanged" + under,
+                    score(means.exchanged(gauge, other, load))));
+          }
         }
       }
     }
@@ -179,7 +277,7 @@ final class ReciprocityHints {
             String name = main.loadName(means);
             guesses.add(
                 new Guess(
-                    Hint.Kind.OFF_LINE,
+                    Optional.of(Hint.Kind.OFF_LINE),
                     List.of(main.gauges().get(0)),
                     String.format(
                         Locale.ROOT,

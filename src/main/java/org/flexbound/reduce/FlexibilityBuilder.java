@@ -18,6 +18,9 @@ import org.flexbound.testlog.TestLog;
 
 /** Makes the measured flexibility of pooled slopes: gains, floors, base motion, averages. */
 final class FlexibilityBuilder {
+  /** Base motion below this share of the largest motion under a load is not told (no source). */
+  private static final double NOTHING = 0.05;
+
   private final ReductionProblem problem;
   private final TestLog log;
   private final Findings findings;
@@ -241,7 +244,7 @@ final class FlexibilityBuilder {
     double share = Math.abs(base / total);
     baseShares.put(Reduction.key(gauge.name(), load.name()), share);
     double limit = log.options().qualityLimits().baseMotionShare();
-    if (share > limit) {
+    if (share > limit && Math.abs(base) > NOTHING * largestMotion(load, absolute)) {
       findings.add(
           ReduceFinding.BASE_MOTION_LARGE,
           gauge.where(),
@@ -253,6 +256,16 @@ final class FlexibilityBuilder {
               load.name(),
               100 * limit));
     }
+  }
+
+  /** The largest coefficient under a load: a small share of it is nothing to worry about. */
+  private double largestMotion(Load load, List<AbsoluteCoefficient> absolute) {
+    return absolute.stream()
+        .filter(a -> log.loads().get(a.load()).equals(load))
+        .filter(a -> !log.gauges().get(a.gauge()).readsAngle())
+        .mapToDouble(a -> Math.abs(a.value()))
+        .max()
+        .orElse(0);
   }
 
   private boolean hasBases() {

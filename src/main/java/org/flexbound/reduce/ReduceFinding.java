@@ -63,24 +63,6 @@ public enum ReduceFinding implements FindingKind {
       Severity.WARNING,
       "A reading does not come back to its opening zero.",
       "Look for set, slip or drift; repeat the run."),
-  /** The movement is too small for the gauge. */
-  COARSE(
-      "RED-COARSE",
-      Severity.WARNING,
-      "A gauge is coarse against its movement.",
-      "Use a finer gauge, or more load within the limit."),
-  /** The gauge does not move at all. */
-  STUCK(
-      "RED-STUCK",
-      Severity.WARNING,
-      "A gauge shows one value throughout.",
-      "Check that it touches and is not out of travel."),
-  /** The load passed its limit. */
-  LOAD_LIMIT(
-      "RED-LOAD-LIMIT",
-      Severity.WARNING,
-      "The load passed its stated limit.",
-      "Stop, and have a competent person decide before going on."),
   /** Runs scatter more than their limit. */
   NOT_REPEATABLE(
       "RED-NOT-REPEATABLE",

@@ -40,6 +40,7 @@ public final class Reducer {
       instrument.resolution().ifPresent(value -> resolutions.put(instrument.name(), value));
     }
     List<RunResult> runs = new ArrayList<>();
+    List<RunReducer> reducers = new ArrayList<>();
     List<RunSlope> slopes = new ArrayList<>();
     List<Exclusion> excluded = new ArrayList<>();
     for (Run run : log.runs()) {
@@ -56,9 +57,19 @@ public final class Reducer {
       }
       RunReducer reducer =
           new RunReducer(run, loads, log.options(), resolutions, findings);
-      runs.add(reducer.reduce());
+      reducer.reduce();
+      reducers.add(reducer);
       slopes.addAll(reducer.slopes());
       excluded.addAll(reducer.excluded());
+    }
+    List<RunRecord> records = reducers.stream().map(RunReducer::record).toList();
+    GaugeNoise noise = new GaugeNoise(slopes, resolutions);
+    GaugeFaults faults =
+        new GaugeFaults(log, records, noise);
+    faults.tell(findings);
+    new RunsCompared(records, noise, findings).tell();
+    for (RunReducer reducer : reducers) {
+      runs.add(reducer.judge(noise, faults.of(reducer.record().run().name())));
     }
     noteUnmeasured(log, slopes, findings);
     if (slopes.stream().noneMatch(RunSlope::isFitted)) {

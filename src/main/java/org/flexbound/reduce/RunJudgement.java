@@ -19,15 +19,18 @@ final class RunJudgement {
   /** Several times a limit: not doubtful any more, but to be repeated (common practice). */
   private static final double FAR = 3;
 
-  private static final double SIGNIFICANT = 0.001;
-
   private final QualityLimits limits;
+  private final GaugeNoise noise;
+  private final List<GaugeFault> faults;
   private final Findings findings;
   private final List<String> reasons = new ArrayList<>();
   private RunVerdict verdict = RunVerdict.ACCEPT;
 
-  RunJudgement(QualityLimits limits, Findings findings) {
+  RunJudgement(
+      QualityLimits limits, GaugeNoise noise, List<GaugeFault> faults, Findings findings) {
     this.limits = limits;
+    this.noise = noise;
+    this.faults = List.copyOf(faults);
     this.findings = findings;
   }
 
@@ -39,6 +42,11 @@ final class RunJudgement {
             .mapToDouble(SlopeQuality::span)
             .max()
             .orElse(0);
+    for (GaugeFault fault : faults) {
+      if (fault.weight() != RunVerdict.ACCEPT) {
+        worse(fault.weight(), fault.column() + " " + fault.text());
+      }
+    }
     for (RunSlope slope : slopes) {
       slope.quality().ifPresent(quality -> judge(run, slope, quality, largest));
     }
@@ -71,50 +79,53 @@ final class RunJudgement {
   }
 
   private void judge(Run run, RunSlope slope, SlopeQuality quality, double largest) {
-    if (quality.span() == 0) {
-      found(ReduceFinding.STUCK, run, slope, "shows one value at every step", RunVerdict.DOUBTFUL);
+    boolean explained =
+        faults.stream()
+            .anyMatch(
+                fault ->
+                    fault.explainsDepartures()
+                        && (fault.column().equals(slope.gauge())
+                            || fault.column().equals(slope.load())));
+    if (explained || quality.span() < MOVED * largest) {
       return;
     }
-    if (quality.span() < MOVED * largest) {
-      return;
-    }
-    double noise = Double.isNaN(quality.resolution()) ? 0 : quality.resolution();
-    over(ReduceFinding.COARSE, run, slope, "resolution", quality.resolution(), limits.resolution());
     over(
         ReduceFinding.NOT_LINEAR,
         run,
         slope,
         "departure from the line",
         quality.linearity(),
-        Math.max(limits.linearity(), noise));
+        limits.linearity());
     over(
         ReduceFinding.HYSTERESIS,
         run,
         slope,
         "gap between loading and unloading",
         quality.hysteresis(),
-        Math.max(limits.hysteresis(), noise));
+        limits.hysteresis());
     over(
         ReduceFinding.ZERO_RETURN,
         run,
         slope,
         "reading that does not come back",
         Math.abs(quality.zeroReturn()),
-        Math.max(limits.zeroReturn(), noise));
-    if (quality.curvatureProbability() < SIGNIFICANT) {
+        limits.zeroReturn());
+    if (quality.curvatureProbability() < noise.levelOfOneSlope()) {
       over(
           ReduceFinding.CURVED,
           run,
           slope,
           "curvature",
           Math.abs(quality.curvature()),
-          Math.max(limits.curvature(), noise));
+          limits.curvature());
     }
   }
 
+  /** Tells a share of span that is over its limit and more than the gauge's noise makes. */
   private void over(
       ReduceFinding kind, Run run, RunSlope slope, String what, double value, double limit) {
-    if (!(value > limit)) {
+    double span = slope.quality().map(SlopeQuality::span).orElse(0.0);
+    if (!(value > limit) || !(value * span > noise.allowance(slope.gauge(), limit))) {
       return;
     }
     found(

@@ -10,6 +10,7 @@ import java.util.OptionalDouble;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
 import org.flexbound.statistics.PooledScatter;
+import org.flexbound.statistics.Quantiles;
 import org.flexbound.testlog.TestLog;
 
 /**
@@ -36,6 +37,9 @@ final class RunPooling {
               / (slopes.size() - 1);
     }
   }
+
+  /** All coefficients together may raise a false alarm this often. */
+  private static final double LEVEL = 0.01;
 
   private final TestLog log;
   private final List<Cell> cells;
@@ -101,7 +105,9 @@ final class RunPooling {
     for (Cell cell : cells) {
       double relative = Math.sqrt(cell.variance()) / Math.abs(cell.mean());
       // a coefficient near zero has a large share of nothing
-      if (relative > limit && Math.abs(cell.mean()) > 0.05 * largest) {
+      if (relative > limit
+          && Math.abs(cell.mean()) > 0.05 * largest
+          && beyondReadings(cell, cells.size())) {
         findings.add(
             ReduceFinding.NOT_REPEATABLE,
             Where.nowhere(),
@@ -115,6 +121,20 @@ final class RunPooling {
                 100 * limit));
       }
     }
+  }
+
+  /** Whether slopes scatter by more than the scatter of the readings within the runs explains. */
+  private static boolean beyondReadings(Cell cell, int cells) {
+    double within =
+        cell.slopes().stream()
+            .mapToDouble(RunSlope::standardError)
+            .filter(error -> !Double.isNaN(error))
+            .map(error -> error * error)
+            .average()
+            .orElse(0);
+    double level = Quantiles.sidak(LEVEL, Math.max(1, cells));
+    return cell.variance()
+        > within * Quantiles.f(1 - level, cell.slopes().size() - 1.0, Double.POSITIVE_INFINITY);
   }
 
   List<Cell> cells() {

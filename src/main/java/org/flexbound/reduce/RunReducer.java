@@ -33,6 +33,9 @@ final class RunReducer {
   private final List<StepGrouping.RawStep> steps;
   private final List<Exclusion> excluded = new ArrayList<>();
   private final List<RunSlope> slopes = new ArrayList<>();
+  private final List<Integer> varied = new ArrayList<>();
+  private final RunWatch watch;
+  private double peak;
   private int cycles;
 
   RunReducer(
@@ -49,6 +52,7 @@ final class RunReducer {
     StepGrouping grouping = StepGrouping.of(run);
     this.steps = grouping.steps();
     this.excluded.addAll(grouping.excluded());
+    this.watch = grouping.watch();
   }
 
   List<RunSlope> slopes() {
@@ -59,16 +63,18 @@ final class RunReducer {
     return List.copyOf(excluded);
   }
 
-  RunResult reduce() {
-    List<Integer> varied = varied();
-    double peak = 0;
+  /** What was kept of the run, for the judgement of its readings. */
+  RunRecord record() {
+    return new RunRecord(run, watch, slopes);
+  }
+
+  /** Fits the slopes. */
+  void reduce() {
+    varied.addAll(varied());
     for (int l : varied) {
       for (StepGrouping.RawStep step : steps) {
         peak = Math.max(peak, Math.abs(step.load[l]));
       }
-    }
-    for (int l = 0; l < run.loads().size(); l++) {
-      checkLimit(l);
     }
     if (varied.isEmpty()) {
       findings.add(ReduceFinding.NO_LOAD, run.where(), "no load varied in run '" + run.name() + "'");
@@ -81,7 +87,12 @@ final class RunReducer {
         }
       }
     }
-    RunJudgement judgement = new RunJudgement(options.qualityLimits(), findings);
+  }
+
+  /** Judges the run, once all runs of the test are reduced. */
+  RunResult judge(GaugeNoise noise, List<GaugeFault> faults) {
+    RunJudgement judgement =
+        new RunJudgement(options.qualityLimits(), noise, faults, findings);
     return judgement.judge(
         run,
         varied.stream().map(l -> run.loads().get(l).name()).toList(),
@@ -130,31 +141,6 @@ final class RunReducer {
   private boolean isMoment(int load) {
     Load known = loads.get(run.loads().get(load).name());
     return known != null && known.isMoment();
-  }
-
-  private void checkLimit(int load) {
-    Load known = loads.get(run.loads().get(load).name());
-    if (known == null || known.limit().isEmpty()) {
-      return;
-    }
-    double limit = known.limit().getAsDouble();
-    // every reading counts, not the mean of its step: an overshoot must not hide in a held step
-    for (StepGrouping.RawStep step : steps) {
-      double value = step.largestLoad[load];
-      if (value > limit) {
-        findings.add(
-            ReduceFinding.LOAD_LIMIT,
-            run.where(),
-            String.format(
-                java.util.Locale.ROOT,
-                "'%s' reached %.4g in run '%s'; its limit is %.4g (SI)",
-                known.name(),
-                value,
-                run.name(),
-                limit));
-        return;
-      }
-    }
   }
 
   /** Two loads that moved in proportion cannot be told apart. */

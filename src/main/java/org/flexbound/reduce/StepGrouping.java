@@ -18,6 +18,7 @@ final class StepGrouping {
   private final double[] tolerance;
   private final List<RawStep> steps = new ArrayList<>();
   private final List<Exclusion> excluded = new ArrayList<>();
+  private final RunWatch watch;
 
   /** A step of all channels. */
   static final class RawStep {
@@ -73,6 +74,7 @@ final class StepGrouping {
   private StepGrouping(Run run, double[] tolerance) {
     this.run = run;
     this.tolerance = tolerance;
+    this.watch = new RunWatch(run);
   }
 
   static StepGrouping of(Run run) {
@@ -97,7 +99,12 @@ final class StepGrouping {
       tolerance[l] = high[l] > low[l] ? HELD * (high[l] - low[l]) : 0;
     }
     StepGrouping grouping = new StepGrouping(run, tolerance);
-    run.readings().forEach(grouping::add);
+    run.readings()
+        .forEach(
+            reading -> {
+              grouping.watch.see(reading);
+              grouping.add(reading);
+            });
     return grouping;
   }
 
@@ -135,6 +142,11 @@ final class StepGrouping {
       }
     }
     return true;
+  }
+
+  /** What was kept of the readings themselves. */
+  RunWatch watch() {
+    return watch;
   }
 
   List<RawStep> steps() {

@@ -62,6 +62,21 @@ public final class TestLogMaker {
     return this;
   }
 
+  /** States the limit of a load. */
+  public TestLogMaker limit(String name, double limit) {
+    loads.computeIfPresent(
+        name,
+        (key, load) ->
+            new Load(
+                load.name(),
+                load.points(),
+                load.instrument(),
+                OptionalDouble.of(limit),
+                load.remark(),
+                load.where()));
+    return this;
+  }
+
   /** Adds a displacement (or, by its direction, rotation) gauge at a node. */
   public TestLogMaker gauge(
       String name, String node, Direction direction, String instrument, boolean base) {
