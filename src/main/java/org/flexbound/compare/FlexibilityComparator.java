@@ -106,6 +106,13 @@ public final class FlexibilityComparator {
               OptionalDouble.empty(),
               largest(parts, r)));
     }
+    double[] uncertainty = new double[values.length];
+    for (int r = 0; r < values.length; r++) {
+      uncertainty[r] = Math.sqrt(covariance[r][r]);
+    }
+    new ComparisonHints(
+            frame, solution, new HintTable(measured, values, computed, uncertainty), findings)
+        .tell();
     WeightedSquares squares = new WeightedSquares(covariance);
     return new ConfigurationComparison(
         measured.configuration(),

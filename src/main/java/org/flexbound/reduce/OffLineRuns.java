@@ -75,7 +75,7 @@ final class OffLineRuns {
           Math.abs(gauge.direction().vector().dot(load.points().get(0).direction().vector()));
       double[] others =
           all.stream()
-              .filter(r -> r != record)
+              .filter(r -> !r.run().name().equals(record.run().name()))
               .flatMap(r -> r.slopes().stream())
               .filter(s -> s.gauge().equals(slope.gauge()) && s.isFitted())
               .mapToDouble(RunSlope::slope)

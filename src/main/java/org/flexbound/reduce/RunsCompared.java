@@ -65,7 +65,7 @@ final class RunsCompared {
     for (RunSlope slope : record.slopes()) {
       double[] others =
           runs.stream()
-              .filter(r -> r != record)
+              .filter(r -> !r.run().name().equals(record.run().name()))
               .flatMap(r -> r.slopes().stream())
               .filter(s -> s.gauge().equals(slope.gauge()) && s.isFitted())
               .mapToDouble(RunSlope::slope)

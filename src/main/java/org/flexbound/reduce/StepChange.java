@@ -26,7 +26,17 @@ record StepChange(LoadStep before, LoadStep after, double size, double equivalen
    * The steps that count, the bedding-in cycle left out, with what the line and its gap leave and an
    * orthonormal basis of them: what one more column takes away follows from its part outside the basis.
    */
-  private record Series(List<LoadStep> steps, List<double[]> basis, double[] left, double top) {
+  private static final class Series {
+    private final List<LoadStep> steps;
+    private final List<double[]> basis;
+    private final double[] left;
+
+    private Series(List<LoadStep> steps, List<double[]> basis, double[] left) {
+      this.steps = steps;
+      this.basis = basis;
+      this.left = left;
+    }
+
     static Series of(RunSlope slope) {
       List<LoadStep> steps =
           slope.steps().stream()
@@ -40,7 +50,7 @@ record StepChange(LoadStep before, LoadStep after, double size, double equivalen
       add(steps.stream().mapToDouble(s -> s.load() / top).toArray(), basis);
       add(steps.stream().mapToDouble(s -> s.rising() ? 1 : -1).toArray(), basis);
       double[] left = outside(steps.stream().mapToDouble(LoadStep::motion).toArray(), basis);
-      return new Series(steps, basis, left, top);
+      return new Series(steps, basis, left);
     }
 
     private static void add(double[] column, List<double[]> basis) {
@@ -123,7 +133,7 @@ record StepChange(LoadStep before, LoadStep after, double size, double equivalen
     }
     double all = series.all();
     double left = Math.max(all - best[1], 0);
-    int free = n - series.basis().size() - 1;
+    int free = n - series.basis.size() - 1;
     double f = best[1] / (left / free);
     if (at == 0
         || !(Math.abs(best[0]) > least)
@@ -133,8 +143,8 @@ record StepChange(LoadStep before, LoadStep after, double size, double equivalen
     }
     return Optional.of(
         new StepChange(
-            series.steps().get(at - 1),
-            series.steps().get(at),
+            series.steps.get(at - 1),
+            series.steps.get(at),
             best[0],
             best[0] / slope.slope()));
   }
@@ -144,14 +154,14 @@ record StepChange(LoadStep before, LoadStep after, double size, double equivalen
     double most = series.with(i -> i)[1];
     for (int k = 0; k < series.size(); k++) {
       int bad = k;
-      double from = series.steps().get(k).load();
+      double from = series.steps.get(k).load();
       most = Math.max(most, series.with(i -> i == bad ? 1 : 0)[1]);
       most =
           Math.max(
               most,
               series.with(
                   i -> {
-                    double load = series.steps().get(i).load();
+                    double load = series.steps.get(i).load();
                     return from * load > 0 ? Math.max(0, Math.abs(load) - Math.abs(from)) : 0;
                   })[1]);
     }

@@ -9,6 +9,8 @@ import java.util.SplittableRandom;
 import org.flexbound.document.JsonFile;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.FrameReader;
+import org.flexbound.frame.StiffnessPath;
+import org.flexbound.frame.StiffnessSetting;
 import org.flexbound.setup.Vector;
 
 /**
@@ -113,6 +115,17 @@ final class SimulatedFrame {
 
   FrameModel model() {
     return model;
+  }
+
+  /** A model of it that is wrong as models are: its joints and its base half again as stiff. */
+  FrameModel wrongModel() {
+    Map<StiffnessPath, StiffnessSetting> settings = new LinkedHashMap<>();
+    for (StiffnessPath path : model.stiffnesses()) {
+      if (path.toString().startsWith("joints") || path.toString().startsWith("supports")) {
+        settings.put(path, new StiffnessSetting.Factor(1.5));
+      }
+    }
+    return model.with(settings);
   }
 
   Vector place(String node) {
