@@ -29,8 +29,9 @@ public final class Flexbound {
   public static void main(String[] arguments) {
     PrintWriter out = writer(FileDescriptor.out);
     PrintWriter err = writer(FileDescriptor.err);
-    boolean colour = isTerminal() && System.getenv("NO_COLOR") == null;
-    System.exit(run(List.of(arguments), new Terminal(out, err, colour)));
+    boolean watched = isTerminal();
+    boolean colour = watched && System.getenv("NO_COLOR") == null;
+    System.exit(run(List.of(arguments), new Terminal(out, err, colour, watched)));
   }
 
   @SuppressWarnings("SystemConsoleNull") // the check for Java 22 and later follows below
@@ -61,7 +62,7 @@ public final class Flexbound {
    * @return the exit code (see {@link ExitCode})
    */
   public static int run(String[] arguments, PrintWriter out, PrintWriter err) {
-    return run(List.of(arguments), new Terminal(out, err, false));
+    return run(List.of(arguments), new Terminal(out, err));
   }
 
   private static int run(List<String> arguments, Terminal terminal) {

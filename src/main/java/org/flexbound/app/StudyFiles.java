@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Optional;
 import org.flexbound.document.Json;
 import org.flexbound.document.JsonFile;
+import org.flexbound.document.ReadProgress;
 import org.flexbound.finding.Finding;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
@@ -59,10 +60,11 @@ record StudyFiles(
    * Reads a study.
    *
    * @param file the study's file
+   * @param progress is told how far the reading of a long log has come
    * @return the study with its files
    * @throws Refusal with the problems of all files, where there are any
    */
-  static StudyFiles read(Path file) {
+  static StudyFiles read(Path file, ReadProgress progress) {
     Findings findings = new Findings();
     String name = String.valueOf(file.getFileName());
     Outcome<Study> read = JsonFile.read(file, name).then(StudyReader::read);
@@ -75,7 +77,7 @@ record StudyFiles(
     Optional<FrameModel> model = model(study, folder, inputs, findings);
     List<Tested> tested = new ArrayList<>();
     for (Configuration configuration : study.configurations()) {
-      tested(configuration, model, folder, inputs, findings).ifPresent(tested::add);
+      tested(configuration, model, folder, progress, inputs, findings).ifPresent(tested::add);
     }
     findings.refuseIfErrors();
     return new StudyFiles(
@@ -140,6 +142,7 @@ record StudyFiles(
       Configuration configuration,
       Optional<FrameModel> model,
       Path folder,
+      ReadProgress progress,
       List<InputFile> inputs,
       Findings findings) {
     if (configuration.log().isEmpty()) {
@@ -150,7 +153,7 @@ record StudyFiles(
       return Optional.empty();
     }
     String name = configuration.log().get();
-    Outcome<TestLog> read = LogFile.read(folder.resolve(name), name);
+    Outcome<TestLog> read = LogFile.read(folder.resolve(name), name, progress);
     findings.addAll(read.findings());
     read.value().ifPresent(log -> inputs.addAll(log.inputs()));
     Optional<FrameModel> changed = model;

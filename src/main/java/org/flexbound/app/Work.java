@@ -37,9 +37,15 @@ final class Work {
   }
 
   ExitCode reduce(Path file) {
+    return finish(reduced(file), new OutputFolder(output.folder), false);
+  }
+
+  /** Reads a log and reduces it; nothing is written or printed. */
+  Results reduced(Path file) {
     String name = String.valueOf(file.getFileName());
     Findings findings = new Findings();
-    Outcome<TestLog> read = LogFile.read(file, name);
+    Outcome<TestLog> read =
+        terminal.withProgress(progress -> LogFile.read(file, name, progress));
     findings.addAll(read.findings());
     findings.refuseIfErrors();
     TestLog log = read.orRefuse();
@@ -52,17 +58,29 @@ final class Work {
     gathering.configuration(
         log, name, reduced.value().orElseThrow(() -> new Refusal(findings.list())), List.of());
     gathering.findings(findings.list());
-    return finish(gathering.results(), new OutputFolder(output.folder), false);
+    return gathering.results();
+  }
+
+  /** Writes the outputs of results that bring nothing else. */
+  List<Path> write(Results results) {
+    OutputFolder folder = new OutputFolder(output.folder);
+    ReportFiles.add(folder, results, output.units);
+    return folder.write();
+  }
+
+  /** Writes and prints. */
+  void show(Results results) {
+    finish(results, new OutputFolder(output.folder), false);
   }
 
   ExitCode compare(Path file) {
-    StudyFiles files = StudyFiles.read(file);
+    StudyFiles files = terminal.withProgress(progress -> StudyFiles.read(file, progress));
     Prepared prepared = prepare("compare", files);
     return finish(prepared.gathering().results(), new OutputFolder(output.folder), false);
   }
 
   ExitCode update(Path file) {
-    StudyFiles files = StudyFiles.read(file);
+    StudyFiles files = terminal.withProgress(progress -> StudyFiles.read(file, progress));
     Prepared prepared = prepare("update", files);
     Outcome<UpdateResult> updated =
         StudyUpdate.run(files.study(), files.model(), prepared.measured());

@@ -138,7 +138,7 @@ final class CellRow implements Row {
 
   @Override
   public Where where(int column) {
-    return Where.cells(file, sheet, columnName(column) + number);
+    return place(file, sheet, number, column);
   }
 
   private String date(double days) {
@@ -147,6 +147,11 @@ final class CellRow implements Row {
     }
     LocalDateTime date = DateUtil.getLocalDateTime(days, from1904);
     return date == null ? DecimalText.shortest(days) : date.toString();
+  }
+
+  /** The place of a cell of a workbook. */
+  static Where place(String file, String sheet, int row, int column) {
+    return Where.cells(file, sheet, columnName(column) + row);
   }
 
   /** The letters of a column, from 0 for A. */

@@ -15,6 +15,7 @@ import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Refusal;
 import org.flexbound.finding.Where;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Opens a text file of separated values (RFC 4180, with any separator and either decimal sign) as a
@@ -120,6 +121,9 @@ public final class CsvFile implements SheetFile {
   }
 
   private final class Rows implements Sheet {
+    private @Nullable LimitedStream reading;
+    private long size;
+
     @Override
     public String name() {
       String last = name.substring(Math.max(name.lastIndexOf('/'), name.lastIndexOf('\\')) + 1);
@@ -130,6 +134,17 @@ public final class CsvFile implements SheetFile {
     @Override
     public Where where() {
       return Where.file(name);
+    }
+
+    @Override
+    public Where cell(int row, int column) {
+      return CsvRow.place(name, row, column);
+    }
+
+    @Override
+    public double shareRead() {
+      LimitedStream stream = reading;
+      return stream == null || size <= 0 ? 0 : (double) stream.count() / size;
     }
 
     @Override
@@ -147,8 +162,10 @@ public final class CsvFile implements SheetFile {
     }
 
     private InputStream stream() throws IOException {
-      InputStream in =
+      LimitedStream in =
           new LimitedStream(Files.newInputStream(path), limits.inflatedBytes(), "inflated-bytes");
+      reading = in;
+      size = Files.size(path);
       in.skipNBytes(dialect.markBytes());
       return dialect.isByteWise()
           ? in

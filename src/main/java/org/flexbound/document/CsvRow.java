@@ -149,6 +149,11 @@ final class CsvRow implements Row {
 
   @Override
   public Where where(int column) {
+    return place(file, line, column);
+  }
+
+  /** The place of a field. */
+  static Where place(String file, int line, int column) {
     return new Where(
         Optional.of(file),
         Optional.empty(),

@@ -34,6 +34,11 @@ final class LegacySheet implements Sheet {
   }
 
   @Override
+  public Where cell(int row, int column) {
+    return CellRow.place(file, sheet.getSheetName(), row, column);
+  }
+
+  @Override
   public SheetNotes notes() {
     try {
       return known();

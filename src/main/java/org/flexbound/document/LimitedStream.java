@@ -39,6 +39,11 @@ final class LimitedStream extends FilterInputStream {
     return n;
   }
 
+  /** How many bytes were read so far. */
+  long count() {
+    return read;
+  }
+
   private void count(int n) throws Passed {
     read += n;
     if (read > limit) {

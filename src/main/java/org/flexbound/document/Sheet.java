@@ -29,6 +29,24 @@ public interface Sheet {
   void forEachRow(RowVisitor visitor);
 
   /**
+   * The place of a cell, whether or not anything stands there.
+   *
+   * @param row the row's number, from 1 (in a CSV file: the line at which it begins)
+   * @param column the column, from 0
+   * @return file, sheet and cell (CSV: file, line and column)
+   */
+  Where cell(int row, int column);
+
+  /**
+   * How much of the sheet the visit that goes on has read.
+   *
+   * @return 0 to 1; 0 where it is not known
+   */
+  default double shareRead() {
+    return 0;
+  }
+
+  /**
    * What is hidden or merged. Known after a visit of all rows; before one, this reads the sheet.
    *
    * @return the notes

@@ -1,7 +1,6 @@
 package org.flexbound.document;
 
 import java.io.IOException;
-import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -25,6 +24,8 @@ final class StreamedSheet implements Sheet {
   private final Shared shared;
   private final String stamp;
   private @Nullable SheetNotes notes;
+  private @Nullable LimitedStream reading;
+  private long size;
 
   /**
    * What the sheets of one workbook share.
@@ -63,6 +64,17 @@ final class StreamedSheet implements Sheet {
   }
 
   @Override
+  public Where cell(int row, int column) {
+    return CellRow.place(file, name, row, column);
+  }
+
+  @Override
+  public double shareRead() {
+    LimitedStream stream = reading;
+    return stream == null || size <= 0 ? 0 : (double) stream.count() / size;
+  }
+
+  @Override
   public SheetNotes notes() {
     SheetNotes known = notes;
     if (known != null) {
@@ -78,11 +90,13 @@ final class StreamedSheet implements Sheet {
     SheetHandler handler =
         new SheetHandler(row, shared.strings(), shared.looks(), shared.limits(), visitor);
     try (ZipFile zip = zip();
-        InputStream in =
+        LimitedStream in =
             new LimitedStream(
                 zip.getInputStream(entry(zip)),
                 shared.limits().inflatedBytes(),
                 "inflated-bytes")) {
+      reading = in;
+      size = entry(zip).getSize();
       if (SheetXml.parse(in, handler)) {
         notes = handler.notes(hidden);
       }

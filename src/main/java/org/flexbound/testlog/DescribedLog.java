@@ -8,6 +8,7 @@ import org.flexbound.document.InputFolder;
 import org.flexbound.document.Json;
 import org.flexbound.document.JsonFile;
 import org.flexbound.document.JsonKeys;
+import org.flexbound.document.ReadProgress;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 
@@ -21,12 +22,13 @@ final class DescribedLog {
 
   private DescribedLog() {}
 
-  static Outcome<TestLog> read(Path path, String shownName) {
+  static Outcome<TestLog> read(Path path, String shownName, ReadProgress progress) {
     return JsonFile.read(path, shownName)
-        .then(json -> new DescribedLog().log(json, path, shownName));
+        .then(json -> new DescribedLog().log(json, path, shownName, progress));
   }
 
-  private Outcome<TestLog> log(Json json, Path path, String shownName) {
+  private Outcome<TestLog> log(
+      Json json, Path path, String shownName, ReadProgress progress) {
     JsonKeys keys = new JsonKeys(findings);
     Optional<Json.Members> top = keys.members(json, "a description of a log");
     if (top.isEmpty()) {
@@ -38,7 +40,8 @@ final class DescribedLog {
         new DescribedFiles(InputFolder.of(path, shownName), keys, findings);
     List<ReadingsSource> sources = files.sources(top.get());
     LogReader reader =
-        new LogReader(new DescribedTables(top.get(), files, findings), sources, findings);
+        new LogReader(
+            new DescribedTables(top.get(), files, findings), sources, progress, findings);
     TestLog log = reader.log(() -> inputs(files));
     return Outcome.of(log, findings.list());
   }

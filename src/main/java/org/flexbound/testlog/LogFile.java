@@ -4,6 +4,7 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
 import org.flexbound.document.DocumentFinding;
+import org.flexbound.document.ReadProgress;
 import org.flexbound.finding.Finding;
 import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Where;
@@ -23,9 +24,21 @@ public final class LogFile {
    * @return the log as far as it could be made out, with everything found
    */
   public static Outcome<TestLog> read(Path path, String shownName) {
+    return read(path, shownName, ReadProgress.NONE);
+  }
+
+  /**
+   * Reads a log. Its files stay open for as long as its readings are used.
+   *
+   * @param path where it lies
+   * @param shownName its name in messages and results
+   * @param progress is told how far the reading of a long file has come
+   * @return the log as far as it could be made out, with everything found
+   */
+  public static Outcome<TestLog> read(Path path, String shownName, ReadProgress progress) {
     String name = shownName.toLowerCase(Locale.ROOT);
     if (name.endsWith(".json")) {
-      return DescribedLog.read(path, shownName);
+      return DescribedLog.read(path, shownName, progress);
     }
     if (name.endsWith(".csv") || name.endsWith(".txt") || name.endsWith(".asc")) {
       return Outcome.none(
@@ -37,6 +50,6 @@ public final class LogFile {
                       + " names this file and says what its columns mean, as log-description.json"
                       + " of the templates does")));
     }
-    return WorkbookLog.read(path, shownName);
+    return WorkbookLog.read(path, shownName, progress);
   }
 }

@@ -10,7 +10,9 @@ import java.util.Set;
 import java.util.function.Supplier;
 import java.util.stream.Collectors;
 import org.flexbound.document.EntryTable;
+import org.flexbound.document.ReadProgress;
 import org.flexbound.finding.Findings;
+import org.flexbound.finding.Refusal;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.NearestWord;
 import org.flexbound.quantity.Unit;
@@ -27,6 +29,7 @@ import org.flexbound.setup.StatedCoefficient;
 final class LogReader {
   private final LogTables tables;
   private final List<ReadingsSource> sources;
+  private final ReadProgress progress;
   private final Findings findings;
   private final EntrySheets sheets;
   private final EntryCells cells;
@@ -36,9 +39,15 @@ final class LogReader {
    *
    * @param tables where the entries stand
    * @param sources the sheets that may hold readings
+   * @param progress is told how far the reading of a long file has come
    * @param findings gets everything found
    */
-  LogReader(LogTables tables, List<ReadingsSource> sources, Findings findings) {
+  LogReader(
+      LogTables tables,
+      List<ReadingsSource> sources,
+      ReadProgress progress,
+      Findings findings) {
+    this.progress = progress;
     this.tables = tables;
     this.sources = List.copyOf(sources);
     this.findings = findings;
@@ -197,7 +206,7 @@ final class LogReader {
             .table(tables.runs())
             .map(found -> RunRows.read(found, !tables.runs().equals(SheetLayout.RUNS), cells, findings))
             .orElse(List.of());
-    RunBuilder builder = new RunBuilder(claims, options.localGravity(), findings);
+    RunBuilder builder = new RunBuilder(claims, options.localGravity(), progress, findings);
     HeaderSearch search =
         new HeaderSearch(
             columns(claims, described, true), columns(claims, described, false), findings);
@@ -212,23 +221,22 @@ final class LogReader {
       used.add(source.get());
       ReadingsSource sound = source.get().whereExpected();
       Optional<ReadingsSheet> readings =
-          headers.computeIfAbsent(source.get(), key -> search.find(sound));
+          headers.computeIfAbsent(
+              source.get(), key -> unlessDamaged(() -> search.find(sound)));
       readings
-          .flatMap(sheet -> builder.build(run, sheet))
-          .ifPresent(built -> add(runs, run, built, readings.get()));
+          .flatMap(sheet -> unlessDamaged(() -> builder.build(run, sheet)))
+          .ifPresent(runs::add);
     }
     for (ReadingsSource source : sources) {
       if (used.contains(source)) {
         continue;
       }
       int before = findings.list().size();
-      Optional<ReadingsSheet> readings = search.find(source);
+      Optional<ReadingsSheet> readings = unlessDamaged(() -> search.find(source));
       if (readings.isPresent()) {
         RunRows.RunRow whole = RunBuilder.whole(readings.get());
         used.add(source);
-        builder
-            .build(whole, readings.get())
-            .ifPresent(built -> add(runs, whole, built, readings.get()));
+        unlessDamaged(() -> builder.build(whole, readings.get())).ifPresent(runs::add);
       } else if (findings.list().size() == before) {
         findings.add(
             TestlogFinding.SHEET_NOT_USED,
@@ -255,7 +263,10 @@ final class LogReader {
                     "no sheet of the file names a load column and a gauge column"));
     sources.stream()
         .filter(used::contains)
-        .forEach(source -> source.sheet().notes().report(source.sheet().where(), findings));
+        .forEach(
+            source ->
+                unlessDamaged(() -> Optional.of(source.sheet().notes()))
+                    .ifPresent(notes -> notes.report(source.sheet().where(), findings)));
     return runs;
   }
 
@@ -310,17 +321,14 @@ final class LogReader {
     return Optional.empty();
   }
 
-  private void add(List<Run> runs, RunRows.RunRow row, Run run, ReadingsSheet sheet) {
-    int first = Math.max(row.firstRow(), sheet.firstDataRow());
-    int last = Math.min(row.lastRow(), sheet.lastRow());
-    int rows = ReadingCheck.check(run, sheet, first, last, findings);
-    if (rows == 0) {
-      findings.add(
-          TestlogFinding.NO_READINGS,
-          sheet.sheet().where(),
-          "found no readings for run '" + run.name() + "'");
+  /** What is damaged or passes a limit is told beside what was found before, and the rest is read. */
+  private <T> Optional<T> unlessDamaged(Supplier<Optional<T>> reading) {
+    try {
+      return reading.get();
+    } catch (Refusal damaged) {
+      findings.addAll(damaged.findings());
+      return Optional.empty();
     }
-    runs.add(run);
   }
 
   private static Set<String> columns(

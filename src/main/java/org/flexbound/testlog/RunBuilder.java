@@ -8,6 +8,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.stream.Collectors;
+import org.flexbound.document.ReadProgress;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.Dimension;
@@ -20,8 +21,12 @@ final class RunBuilder {
   private final double gravity;
   private final Findings findings;
   private final EntryCells cells;
+  private final ReadingMemory memory = new ReadingMemory();
+  private final ReadProgress progress;
 
-  RunBuilder(List<Claim> claims, double gravity, Findings findings) {
+  RunBuilder(
+      List<Claim> claims, double gravity, ReadProgress progress, Findings findings) {
+    this.progress = progress;
     this.claims = List.copyOf(claims);
     this.gravity = gravity;
     this.findings = findings;
@@ -68,17 +73,22 @@ final class RunBuilder {
     if (!sound || loads.isEmpty()) {
       return Optional.empty();
     }
-    Readings readings =
-        new SheetReadings(
+    ReadingPass pass =
+        ReadingPass.read(
             sheet.sheet(),
+            sheet.layout(),
             Math.max(run.firstRow(), sheet.firstDataRow()),
             Math.min(run.lastRow(), sheet.lastRow()),
-            loads.stream().mapToInt(s -> s.cell().index()).toArray(),
-            loads.stream().map(Settled::unit).toArray(Unit[]::new),
-            gauges.stream().mapToInt(s -> s.cell().index()).toArray(),
-            gauges.stream().map(Settled::unit).toArray(Unit[]::new),
-            extras(sheet),
-            sheet.layout());
+            columns(loads, gauges, sheet),
+            memory,
+            progress,
+            findings);
+    if (pass.usable() == 0) {
+      findings.add(
+          TestlogFinding.NO_READINGS,
+          sheet.sheet().where(),
+          "found no readings for run '" + run.name() + "'");
+    }
     return Optional.of(
         new Run(
             run.name(),
@@ -88,7 +98,7 @@ final class RunBuilder {
             run.remark(),
             loads.stream().map(Settled::channel).toList(),
             gauges.stream().map(Settled::channel).toList(),
-            readings,
+            pass.readings(),
             sheet.sheet().where()));
   }
 
@@ -272,7 +282,8 @@ final class RunBuilder {
         : List.of(Dimension.LENGTH, Dimension.ANGLE, Dimension.NUMBER);
   }
 
-  private SheetReadings.Extras extras(ReadingsSheet sheet) {
+  private ReadingColumns columns(
+      List<Settled> loads, List<Settled> gauges, ReadingsSheet sheet) {
     Unit seconds = new Unit("s", Dimension.TIME, 1, 0);
     Unit timeUnit =
         sheet
@@ -281,7 +292,9 @@ final class RunBuilder {
             .flatMap(
                 cell -> cells.unit(cell.unit(), cell.unitWhere(), List.of(Dimension.TIME), "time"))
             .orElse(seconds);
-    return new SheetReadings.Extras(
+    return new ReadingColumns(
+        loads.stream().map(s -> new ReadingColumns.Column(s.cell(), s.unit())).toList(),
+        gauges.stream().map(s -> new ReadingColumns.Column(s.cell(), s.unit())).toList(),
         index(sheet, "Time"),
         timeUnit,
         index(sheet, "Step"),

@@ -104,6 +104,12 @@ public enum TestlogFinding implements FindingKind {
       Severity.NOTE,
       "Cells hold a text that the description of the log gives for a missing reading.",
       "Nothing to do, unless readings were lost that are needed."),
+  /** Times that cannot be read. */
+  TIME_NOT_READ(
+      "LOG-TIME-NOT-READ",
+      Severity.NOTE,
+      "Times in the column Time could not be read, and count as not stated.",
+      "Write them as seconds or as a clock, where drift is to be judged."),
   /** Numbers are scaled. */
   SCALED(
       "LOG-SCALED",

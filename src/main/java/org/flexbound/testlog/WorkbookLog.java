@@ -11,6 +11,7 @@ import java.security.NoSuchAlgorithmException;
 import java.util.ArrayList;
 import java.util.HexFormat;
 import java.util.List;
+import org.flexbound.document.ReadProgress;
 import org.flexbound.document.Sheet;
 import org.flexbound.document.SheetFile;
 import org.flexbound.document.WorkbookFile;
@@ -22,18 +23,22 @@ public final class WorkbookLog {
   private WorkbookLog() {}
 
   /**
-   * Reads a workbook. It stays open for as long as the readings of the log are used.
+   * Reads a workbook.
    *
    * @param path where it lies
    * @param shownName its name in messages and results
    * @return the log as far as it could be made out, with everything found
    */
   public static Outcome<TestLog> read(Path path, String shownName) {
-    return WorkbookFile.open(path, shownName)
-        .then(file -> log(file, new InputFile(shownName, sha256(path))));
+    return read(path, shownName, ReadProgress.NONE);
   }
 
-  private static Outcome<TestLog> log(SheetFile file, InputFile input) {
+  static Outcome<TestLog> read(Path path, String shownName, ReadProgress progress) {
+    return WorkbookFile.open(path, shownName)
+        .then(file -> log(file, new InputFile(shownName, sha256(path)), progress));
+  }
+
+  private static Outcome<TestLog> log(SheetFile file, InputFile input, ReadProgress progress) {
     Findings findings = new Findings();
     List<ReadingsSource> sources = new ArrayList<>();
     for (Sheet sheet : file.sheets()) {
@@ -46,7 +51,8 @@ public final class WorkbookLog {
       }
     }
     TestLog log =
-        new LogReader(new WorkbookTables(file, findings), sources, findings).log(() -> List.of(input));
+        new LogReader(new WorkbookTables(file, findings), sources, progress, findings)
+            .log(() -> List.of(input));
     return Outcome.of(log, findings.list());
   }
 

@@ -4,6 +4,7 @@ import java.util.Optional;
 import org.flexbound.document.EntryTable;
 import org.flexbound.document.SheetFile;
 import org.flexbound.finding.Findings;
+import org.flexbound.finding.Refusal;
 import org.flexbound.finding.Where;
 
 /** The sheets of entries of a workbook. */
@@ -18,9 +19,14 @@ final class WorkbookTables implements LogTables {
 
   @Override
   public Optional<EntryTable> table(SheetLayout layout) {
-    return file.sheet(layout.name())
-        .flatMap(
-            sheet -> EntryTable.read(sheet, layout.required(), layout.optional(), findings));
+    try {
+      return file.sheet(layout.name())
+          .flatMap(
+              sheet -> EntryTable.read(sheet, layout.required(), layout.optional(), findings));
+    } catch (Refusal damaged) {
+      findings.addAll(damaged.findings());
+      return Optional.empty();
+    }
   }
 
   @Override
