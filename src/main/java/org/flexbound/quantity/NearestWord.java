@@ -19,7 +19,7 @@ public final class NearestWord {
    */
   public static List<String> of(String word, Collection<String> known) {
     return known.stream()
-        .filter(candidate -> distance(candidate, word) <= Math.max(1, (word.length() + 1) / 3))
+        .filter(candidate -> isNear(candidate, word))
         .sorted(
             Comparator.<String>comparingInt(candidate -> distance(candidate, word))
                 .thenComparing(Comparator.naturalOrder()))
@@ -37,6 +37,11 @@ public final class NearestWord {
   public static String question(String word, Collection<String> known) {
     List<String> near = of(word, known);
     return near.isEmpty() ? "" : ". Did you mean '" + near.get(0) + "'?";
+  }
+
+  private static boolean isNear(String candidate, String word) {
+    int distance = distance(candidate, word);
+    return distance <= Math.max(1, (word.length() + 1) / 3) && distance < candidate.length();
   }
 
   private static int distance(String left, String right) {

@@ -42,7 +42,7 @@ final class DescribedFiles {
   private final InputFolder folder;
   private final JsonKeys keys;
   private final Findings findings;
-  private final Set<InputFile> inputs = new LinkedHashSet<>();
+  private final Map<String, Checksum> sums = new LinkedHashMap<>();
   private final List<ReadingsSource> sources = new ArrayList<>();
 
   DescribedFiles(InputFolder folder, JsonKeys keys, Findings findings) {
@@ -52,8 +52,10 @@ final class DescribedFiles {
   }
 
   /** The files that were opened. */
-  Set<InputFile> inputs() {
-    return inputs;
+  List<InputFile> inputs() {
+    return sums.entrySet().stream()
+        .map(entry -> new InputFile(entry.getKey(), entry.getValue().digits()))
+        .toList();
   }
 
   /** The sheets that hold readings, in the order of the description. */
@@ -146,7 +148,7 @@ final class DescribedFiles {
     if (opened.value().isEmpty()) {
       return Optional.empty();
     }
-    inputs.add(new InputFile(shown, WorkbookLog.sha256(path)));
+    sums.computeIfAbsent(shown, key -> Checksum.begin(path));
     SheetFile file = opened.value().get();
     boolean text = TableFile.isText(file);
     for (String key : text ? List.of("sheet", "sheets") : OF_TEXT) {

@@ -1,15 +1,7 @@
 package org.flexbound.testlog;
 
-import java.io.IOException;
-import java.io.InputStream;
-import java.io.UncheckedIOException;
-import java.nio.file.Files;
 import java.nio.file.Path;
-import java.security.DigestInputStream;
-import java.security.MessageDigest;
-import java.security.NoSuchAlgorithmException;
 import java.util.ArrayList;
-import java.util.HexFormat;
 import java.util.List;
 import org.flexbound.document.ReadProgress;
 import org.flexbound.document.Sheet;
@@ -17,6 +9,7 @@ import org.flexbound.document.SheetFile;
 import org.flexbound.document.WorkbookFile;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
+import org.flexbound.finding.Refusal;
 
 /** Reads a load-test workbook; all its problems come in one answer. */
 public final class WorkbookLog {
@@ -35,16 +28,18 @@ public final class WorkbookLog {
 
   static Outcome<TestLog> read(Path path, String shownName, ReadProgress progress) {
     return WorkbookFile.open(path, shownName)
-        .then(file -> log(file, new InputFile(shownName, sha256(path)), progress));
+        .then(file -> log(file, shownName, Checksum.begin(path), progress));
   }
 
-  private static Outcome<TestLog> log(SheetFile file, InputFile input, ReadProgress progress) {
+  private static Outcome<TestLog> log(
+      SheetFile file, String shownName, Checksum sum, ReadProgress progress) {
     Findings findings = new Findings();
     List<ReadingsSource> sources = new ArrayList<>();
     for (Sheet sheet : file.sheets()) {
       String key = HeaderText.key(sheet.name());
-      if (SheetLayout.known().stream().anyMatch(layout -> HeaderText.key(layout.name()).equals(key))) {
-        sheet.notes().report(sheet.where(), findings);
+      if (SheetLayout.known().stream()
+          .anyMatch(layout -> HeaderText.key(layout.name()).equals(key))) {
+        note(sheet, findings);
       } else if (!key.equals("examples")) {
         sources.add(
             new ReadingsSource(sheet, "", sheet.name(), ReadingsLayout.OPEN, false));
@@ -52,8 +47,17 @@ public final class WorkbookLog {
     }
     TestLog log =
         new LogReader(new WorkbookTables(file, findings), sources, progress, findings)
-            .log(() -> List.of(input));
+            .log(() -> List.of(new InputFile(shownName, sum.digits())));
     return Outcome.of(log, findings.list());
+  }
+
+  /** What is hidden or merged; a damaged sheet is told when its table is read. */
+  private static void note(Sheet sheet, Findings findings) {
+    try {
+      sheet.notes().report(sheet.where(), findings);
+    } catch (Refusal damaged) {
+      // its table says so
+    }
   }
 
   /**
@@ -63,16 +67,6 @@ public final class WorkbookLog {
    * @return SHA-256 in lower-case hexadecimal digits
    */
   public static String sha256(Path path) {
-    try (InputStream in = Files.newInputStream(path)) {
-      MessageDigest digest = MessageDigest.getInstance("SHA-256");
-      try (DigestInputStream through = new DigestInputStream(in, digest)) {
-        through.transferTo(java.io.OutputStream.nullOutputStream());
-      }
-      return HexFormat.of().formatHex(digest.digest());
-    } catch (IOException refused) {
-      throw new UncheckedIOException(refused);
-    } catch (NoSuchAlgorithmException impossible) {
-      throw new IllegalStateException("every Java platform has SHA-256", impossible);
-    }
+    return Checksum.of(path);
   }
 }

@@ -3,9 +3,19 @@ package org.flexbound.testlog;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.io.IOException;
+import java.io.InputStream;
+import java.io.OutputStream;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.zip.ZipEntry;
+import java.util.zip.ZipFile;
+import java.util.zip.ZipOutputStream;
+import org.apache.poi.ss.usermodel.Cell;
+import org.apache.poi.ss.usermodel.CellStyle;
+import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 import org.flexbound.finding.Finding;
 import org.flexbound.finding.Outcome;
 import org.flexbound.setup.GaugeKind;
@@ -154,5 +164,72 @@ class WorkbookLogTest {
     List<Double> seen = new ArrayList<>();
     log.runs().get(0).readings().forEach(r -> seen.add(r.load(0)));
     assertThat(seen.get(2)).isCloseTo(2 * 9.81, within(1e-12));
+  }
+
+  @Test
+  void aNumberShownInPercentIsWhatItsWriterSaw() throws IOException {
+    WorkbookMaker maker = twoPoints();
+    maker.row("Options", "Item", "Entry").row("Options", "Linearity limit", 0.015);
+    maker.row("Options", "Stated repeatability", 2);
+    Path file = maker.write(folder.resolve("percent.xlsx"));
+    try (InputStream in = Files.newInputStream(file);
+        XSSFWorkbook workbook = new XSSFWorkbook(in)) {
+      CellStyle percent = workbook.createCellStyle();
+      percent.setDataFormat(workbook.createDataFormat().getFormat("0.0 %"));
+      workbook.getSheet("Options").getRow(1).getCell(1).setCellStyle(percent);
+      Cell share = workbook.getSheet("Instruments").getRow(1).getCell(4);
+      share.setCellValue(0.01);
+      share.setCellStyle(percent);
+      try (OutputStream out = Files.newOutputStream(file)) {
+        workbook.write(out);
+      }
+    }
+    TestLog log = WorkbookLog.read(file, "percent.xlsx").orRefuse();
+    assertThat(log.options().qualityLimits().linearity()).isCloseTo(0.015, within(1e-15));
+    assertThat(log.options().statedRepeatability()).hasValue(0.02);
+    assertThat(log.instruments().get(0).gainUncertainty()).hasValue(0.005);
+  }
+
+  @Test
+  void aValueMayCarryItsOwnUnit() {
+    WorkbookMaker maker = twoPoints();
+    maker.set("Load points", 1, 7, "100 cm").set("Instruments", 1, 5, "0,002 kN");
+    TestLog log = read(maker).orRefuse();
+    assertThat(log.loads().get(0).points().get(0).coordinates()).contains(new Vector(1, 0, 0));
+    assertThat(log.instruments().get(0).floorUncertainty()).hasValue(1.0);
+    assertThat(read(twoPoints().set("Load points", 1, 7, "1 kg")).findings())
+        .extracting(finding -> finding.code() + " " + finding.where().cells().orElse(""))
+        .containsExactly("LOG-UNIT H2");
+  }
+
+  @Test
+  void aHeaderThatNamesAColumnTwiceIsRefused() {
+    WorkbookMaker maker = twoPoints();
+    maker.set("Tip run", 0, 4, "G1");
+    assertThat(read(maker).findings())
+        .extracting(finding -> finding.code() + " " + finding.where())
+        .containsExactly("LOG-TWICE log.xlsx, sheet Tip run, cell E1");
+  }
+
+  @Test
+  void aDamagedSheetLosesNothingThatWasFoundBefore() throws IOException {
+    WorkbookMaker maker = twoPoints().set("Gauges", 1, 2, "sideways");
+    Path file = maker.write(folder.resolve("damaged.xlsx"));
+    Path broken = folder.resolve("broken.xlsx");
+    try (ZipFile zip = new ZipFile(file.toFile());
+        ZipOutputStream out = new ZipOutputStream(Files.newOutputStream(broken))) {
+      for (ZipEntry entry : java.util.Collections.list(zip.entries()).toArray(ZipEntry[]::new)) {
+        byte[] bytes = zip.getInputStream(entry).readAllBytes();
+        out.putNextEntry(new ZipEntry(entry.getName()));
+        // the sixth sheet is the first run
+        int length = entry.getName().endsWith("sheet6.xml") ? bytes.length * 2 / 3 : bytes.length;
+        out.write(bytes, 0, length);
+      }
+    }
+    assertThat(WorkbookLog.read(broken, "broken.xlsx").findings())
+        .extracting(finding -> finding.code() + " " + finding.where())
+        .contains(
+            "LOG-DIRECTION broken.xlsx, sheet Gauges, cell C2",
+            "DOC-UNREADABLE broken.xlsx, sheet Tip run");
   }
 }
