@@ -20,9 +20,10 @@ public record StatedNumber(double value, Optional<Unit> unit, boolean isText) {
   private static final Pattern PLAIN =
       Pattern.compile("[-+]?([0-9]+(\\.[0-9]*)?|\\.[0-9]+)([eE][-+]?[0-9]+)?");
 
-  /** A number with a comma and what follows; before three digits it may part thousands. */
+  /** A number with a comma and what follows; before three digits it may part thousands, except 0. */
   private static final Pattern COMMA =
-      Pattern.compile("([-+]?[0-9]+),([0-9]{1,2}|[0-9]{4,})(?![0-9.,])(.*)");
+      Pattern.compile(
+          "([-+]?(?:0|[0-9]+(?=,(?![0-9]{3}(?![0-9]))))),([0-9]+)(?![0-9.,])(.*)");
 
   /**
    * The number that a cell states.
