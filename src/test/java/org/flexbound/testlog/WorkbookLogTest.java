@@ -193,13 +193,13 @@ class WorkbookLogTest {
   @Test
   void aValueMayCarryItsOwnUnit() {
     WorkbookMaker maker = twoPoints();
-    maker.set("Load points", 1, 7, "100 cm").set("Instruments", 1, 5, "0,002 kN");
+    maker.set("Load points", 1, 6, "100 cm").set("Instruments", 1, 5, "0,002 kN");
     TestLog log = read(maker).orRefuse();
     assertThat(log.loads().get(0).points().get(0).coordinates()).contains(new Vector(1, 0, 0));
     assertThat(log.instruments().get(0).floorUncertainty()).hasValue(1.0);
-    assertThat(read(twoPoints().set("Load points", 1, 7, "1 kg")).findings())
+    assertThat(read(twoPoints().set("Load points", 1, 6, "1 kg")).findings())
         .extracting(finding -> finding.code() + " " + finding.where().cells().orElse(""))
-        .containsExactly("LOG-UNIT H2");
+        .containsExactly("LOG-UNIT G2");
   }
 
   @Test
