@@ -11,7 +11,10 @@ import org.flexbound.report.results.Finding;
 import org.flexbound.report.results.Results;
 import org.flexbound.report.results.Run;
 
-/** What changed from one reduction of a log to the next, in sentences. */
+/**
+ * What changed from one reduction of a log to the next, in sentences: verdicts, coefficients that
+ * moved by more than their uncertainty before, findings that came or went.
+ */
 final class ReductionChange {
   /** Comes and goes with the program in which the log is being edited. */
   private static final String OPEN_ELSEWHERE = "DOC-OPEN-ELSEWHERE";
@@ -40,19 +43,12 @@ final class ReductionChange {
     before.runs().forEach(run -> old.put(run.name(), run));
     for (Run run : after.runs()) {
       Run was = old.remove(run.name());
-      String because = run.reasons().isEmpty() ? "" : ": " + String.join("; ", run.reasons());
       if (was == null) {
-        sentences.add("run " + run.name() + " is new: " + run.verdict() + because);
+        sentences.add("run " + run.name() + " is new: " + run.verdict());
       } else if (!was.verdict().equals(run.verdict())) {
-        sentences.add(
-            "run " + run.name() + ": " + was.verdict() + " → " + run.verdict() + because);
+        sentences.add("run " + run.name() + ": " + was.verdict() + " → " + run.verdict());
       } else if (!was.reasons().equals(run.reasons())) {
-        sentences.add(
-            "run "
-                + run.name()
-                + ": still "
-                + run.verdict()
-                + (because.isEmpty() ? ", and nothing speaks against it now" : because));
+        sentences.add("run " + run.name() + ": still " + run.verdict() + ", the reasons are others");
       }
     }
     old.values().forEach(run -> sentences.add("run " + run.name() + " is gone"));
@@ -72,7 +68,8 @@ final class ReductionChange {
         continue;
       }
       double moved = Math.abs(now.value() - was.value());
-      double u = Math.max(now.standardUncertainty(), was.standardUncertainty());
+      // a reading that spoils a run widens what comes after it: what it was before is the measure
+      double u = was.standardUncertainty();
       if (moved > u) {
         sentences.add(
             "coefficient "
