@@ -2,7 +2,6 @@ package org.flexbound.testlog;
 
 import java.time.DateTimeException;
 import java.time.LocalDateTime;
-import java.time.ZoneOffset;
 import java.util.Locale;
 import java.util.OptionalDouble;
 import java.util.regex.Matcher;
@@ -172,7 +171,8 @@ final class ReadingPass {
     }
     try {
       LocalDateTime moment = LocalDateTime.parse(text.replace(' ', 'T').replace(',', '.'));
-      return moment.toEpochSecond(ZoneOffset.UTC) + 1e-9 * moment.getNano();
+      return 86400.0 * moment.toLocalDate().toEpochDay()
+          + 1e-9 * moment.toLocalTime().toNanoOfDay();
     } catch (DateTimeException strange) {
       if (strangeTimes++ == 0) {
         firstStrangeTime = row.where(columns.time());
