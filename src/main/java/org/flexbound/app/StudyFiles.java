@@ -13,12 +13,13 @@ import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Refusal;
 import org.flexbound.finding.Where;
+import org.flexbound.flexibility.MeasuredModes;
+import org.flexbound.flexibility.OutsideTableReader;
 import org.flexbound.frame.FrameChanges;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.FrameReader;
 import org.flexbound.solve.FrameFlexibility;
 import org.flexbound.study.Configuration;
-import org.flexbound.study.FlexibilityChoice;
 import org.flexbound.study.Study;
 import org.flexbound.study.StudyFinding;
 import org.flexbound.study.StudyReader;
@@ -34,6 +35,7 @@ import org.flexbound.testlog.WorkbookLog;
  * @param study the study
  * @param model its frame model
  * @param tested one for each configuration
+ * @param modes the table of measured modes, where the study names one
  * @param inputs the files that were read
  * @param findings what was noticed, no errors
  */
@@ -41,6 +43,7 @@ record StudyFiles(
     Study study,
     FrameModel model,
     List<Tested> tested,
+    Optional<MeasuredModes> modes,
     List<InputFile> inputs,
     List<Finding> findings) {
 
@@ -79,13 +82,46 @@ record StudyFiles(
     for (Configuration configuration : study.configurations()) {
       tested(configuration, model, folder, progress, inputs, findings).ifPresent(tested::add);
     }
+    Optional<MeasuredModes> modes = modes(study, tested, folder, inputs, findings);
     findings.refuseIfErrors();
     return new StudyFiles(
         study,
         model.orElseThrow(() -> new Refusal(findings.list())),
         tested,
+        modes,
         inputs,
         findings.list());
+  }
+
+  private static Optional<MeasuredModes> modes(
+      Study study,
+      List<Tested> tested,
+      Path folder,
+      List<InputFile> inputs,
+      Findings findings) {
+    if (study.measuredModes().isEmpty()) {
+      return Optional.empty();
+    }
+    String name = study.measuredModes().get().file();
+    Path file = folder.resolve(name);
+    List<String> gauges =
+        tested.stream()
+            .flatMap(t -> t.log().gauges().stream())
+            .map(gauge -> gauge.name())
+            .distinct()
+            .toList();
+    List<String> loads =
+        tested.stream()
+            .flatMap(t -> t.log().loads().stream())
+            .map(load -> load.name())
+            .distinct()
+            .toList();
+    Outcome<MeasuredModes> read = OutsideTableReader.readModes(file, name, gauges, loads);
+    findings.addAll(read.findings());
+    if (Files.isReadable(file)) {
+      inputs.add(new InputFile(name, WorkbookLog.sha256(file)));
+    }
+    return read.value();
   }
 
   private static void refuseUnsupported(Study study, Findings findings) {
@@ -97,15 +133,6 @@ record StudyFiles(
           study.where(),
           "a study without the key 'model' is not supported yet");
     }
-    if (study.flexibility() instanceof FlexibilityChoice.Truncated) {
-      findings.add(
-          StudyFinding.NOT_SUPPORTED_YET,
-          study.where(),
-          "the key 'flexibility' with a number of modes is not supported yet; use \"full\"");
-    }
-    study
-        .measuredModes()
-        .ifPresent(table -> tableLater(table.where(), "measuredModes", findings));
     study
         .outsideFlexibility()
         .ifPresent(table -> tableLater(table.where(), "outsideFlexibility", findings));

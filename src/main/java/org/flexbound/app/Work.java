@@ -124,7 +124,8 @@ final class Work {
     }
     findings.refuseIfErrors();
     Outcome<Comparison> compared =
-        FlexibilityComparator.compare(files.study(), files.model(), measured);
+        FlexibilityComparator.compare(
+            files.study(), files.model(), measured, files.modes());
     findings.addAll(compared.findings());
     findings.refuseIfErrors();
     compared.value().ifPresent(gathering::comparison);

@@ -29,6 +29,12 @@ public enum CompareFinding implements FindingKind {
       Severity.ERROR,
       "No coefficient of a configuration can be compared with the model.",
       "Look at the verdicts of its runs and at the findings about base motion."),
+  /** What truncation alone explains. */
+  TRUNCATION(
+      "COMPARE-TRUNCATION",
+      Severity.NOTE,
+      "The computed flexibility is that of the lowest modes only, which leave a part of it out.",
+      "Compare with the full flexibility, unless the model is known by its modes only."),
   /** A sign that disagrees, far outside of the uncertainty. */
   OPPOSITE_SIGN(
       "COMPARE-OPPOSITE-SIGN",

@@ -302,6 +302,17 @@ public final class ConfiguredFrame {
   }
 
   /**
+   * The modes that the flexibility is made of.
+   *
+   * @return the truncated flexibility; empty where it is the whole
+   */
+  public Optional<TruncatedFlexibility> truncated() {
+    return flexibility instanceof TruncatedFlexibility modes
+        ? Optional.of(modes)
+        : Optional.empty();
+  }
+
+  /**
    * Takes the absolute coefficients that were measured out of a whole matrix.
    *
    * @param matrix gauges × loads

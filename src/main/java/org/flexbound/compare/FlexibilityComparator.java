@@ -5,6 +5,7 @@ import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import org.apache.commons.statistics.distribution.ChiSquaredDistribution;
 import org.apache.commons.statistics.distribution.FDistribution;
@@ -13,6 +14,7 @@ import org.flexbound.finding.Outcome;
 import org.flexbound.flexibility.AbsoluteCoefficient;
 import org.flexbound.flexibility.Coefficient;
 import org.flexbound.flexibility.MeasuredFlexibility;
+import org.flexbound.flexibility.MeasuredModes;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.solve.ComputedFlexibility;
 import org.flexbound.solve.PartContribution;
@@ -40,8 +42,29 @@ public final class FlexibilityComparator {
    */
   public static Outcome<Comparison> compare(
       Study study, FrameModel model, List<MeasuredFlexibility> measured) {
+    return compare(study, model, measured, Optional.empty());
+  }
+
+  /**
+   * Compares the nominal model of a study, and a table of measured modes beside it.
+   *
+   * @param study the study
+   * @param model its frame model
+   * @param measured what was measured, by configuration
+   * @param modes the table of measured modes, if there is one
+   * @return the comparison, with all findings; no value where anything is in error
+   */
+  public static Outcome<Comparison> compare(
+      Study study,
+      FrameModel model,
+      List<MeasuredFlexibility> measured,
+      Optional<MeasuredModes> modes) {
     return ConfiguredFrame.prepare(study, model, measured)
-        .then(frames -> Outcome.of(compare(frames), List.of()));
+        .then(
+            frames -> {
+              Comparison comparison = compare(frames, modes);
+              return Outcome.of(comparison, comparison.findings());
+            });
   }
 
   /**
@@ -51,16 +74,23 @@ public final class FlexibilityComparator {
    * @return the comparison
    */
   public static Comparison compare(List<ConfiguredFrame> frames) {
+    return compare(frames, Optional.empty());
+  }
+
+  private static Comparison compare(List<ConfiguredFrame> frames, Optional<MeasuredModes> modes) {
     Findings findings = new Findings();
     List<ConfigurationComparison> result = new ArrayList<>();
     for (ConfiguredFrame frame : frames) {
-      result.add(compare(frame, frame.nominal(), findings));
+      result.add(compare(frame, frame.nominal(), modes, findings));
     }
     return new Comparison(result, findings.list());
   }
 
   private static ConfigurationComparison compare(
-      ConfiguredFrame frame, ComputedFlexibility solution, Findings findings) {
+      ConfiguredFrame frame,
+      ComputedFlexibility solution,
+      Optional<MeasuredModes> modes,
+      Findings findings) {
     MeasuredFlexibility measured = frame.measured();
     double[] absolute = frame.absolute(solution.values());
     double[] computed = measured.map().apply(absolute);
@@ -72,10 +102,19 @@ public final class FlexibilityComparator {
     double[][] covariance =
         DifferenceCovariance.of(measured, absolute, PlacingEffects.of(frame, solution));
     Map<String, double[]> parts = parts(measured, solution);
+    Optional<TruncationEffect> effect =
+        frame.truncated().map(truncated -> new TruncationEffect(frame, truncated));
+    List<CoefficientComparison.Truncated> truncated =
+        effect.map(TruncationEffect::coefficients).orElse(List.of());
+    Optional<OptionalDouble[]> fromModes =
+        modes.map(table -> ModeTable.coefficients(measured, table));
+    double[] uncertainty = new double[values.length];
     List<CoefficientComparison> coefficients = new ArrayList<>();
     for (int r = 0; r < values.length; r++) {
       Coefficient coefficient = measured.coefficients().get(r);
       double u = Math.sqrt(covariance[r][r]);
+      uncertainty[r] = u;
+      int row = r;
       String gauge = measured.gauges().get(coefficient.gauge()).name();
       String load = measured.loads().get(coefficient.load()).name();
       if (values[r] * computed[r] < 0 && Math.min(Math.abs(values[r]), Math.abs(computed[r])) > 3 * u) {
@@ -103,7 +142,8 @@ public final class FlexibilityComparator {
                   : OptionalDouble.empty(),
               u,
               differences[r] / u,
-              OptionalDouble.empty(),
+              truncated.isEmpty() ? Optional.empty() : Optional.of(truncated.get(r)),
+              fromModes.map(all -> all[row]).orElse(OptionalDouble.empty()),
               largest(parts, r)));
     }
     double[] uncertainty = new double[values.length];
@@ -114,10 +154,12 @@ public final class FlexibilityComparator {
             frame, solution, new HintTable(measured, values, computed, uncertainty), findings)
         .tell();
     WeightedSquares squares = new WeightedSquares(covariance);
+    double misfit = squares.product(differences, differences);
+    effect.ifPresent(told -> told.tell(misfit, squares, uncertainty, findings));
     return new ConfigurationComparison(
         measured.configuration(),
         coefficients,
-        squares.product(differences, differences),
+        misfit,
         limit(squares.rank(), measured.scatterDegreesOfFreedom()),
         shares(parts, differences, squares));
   }

@@ -34,6 +34,7 @@ public final class FrameModes {
   private final double[][] atGauges;
   private final double[][] atLoads;
   private final double[][] full;
+  private final double[][] massless;
   private final List<Map<String, double[]>> shapes;
 
   private FrameModes(ModalModel model, EigenPairs pairs, int rigid, double[][] full) {
@@ -55,6 +56,7 @@ public final class FrameModes {
       shapes.add(model.atNodes(motions));
     }
     this.full = full;
+    this.massless = MasslessPart.of(model);
   }
 
   /**
@@ -222,6 +224,15 @@ public final class FrameModes {
       }
     }
     return result;
+  }
+
+  /**
+   * What no number of modes makes up, since freedoms without mass follow statically.
+   *
+   * @return [gauge][load]; zero where every freedom has mass
+   */
+  public double[][] massless() {
+    return Arrays.stream(massless).map(double[]::clone).toArray(double[][]::new);
   }
 
   /**

@@ -15,7 +15,6 @@ import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.StiffnessPath;
 import org.flexbound.frame.StiffnessSetting;
 import org.flexbound.study.Configuration;
-import org.flexbound.study.FlexibilityChoice;
 import org.flexbound.study.HeldOutCase;
 import org.flexbound.study.Parameter;
 import org.flexbound.study.Study;
@@ -76,7 +75,6 @@ public final class StudyUpdate {
           study.where(),
           "the study has no 'parameters', so that nothing may change");
     }
-    refuseUnsupported(study, findings);
     refuseUnknownCases(study, measured, findings);
     Outcome<List<ConfiguredFrame>> frames = ConfiguredFrame.prepare(study, model, measured);
     findings.addAll(frames.findings());
@@ -203,20 +201,6 @@ public final class StudyUpdate {
     }
     return Outcome.of(expected, findings.list())
         .then(measured -> run(study, model, measured, UpdateSettings.ESTIMATES));
-  }
-
-  private static void refuseUnsupported(Study study, Findings findings) {
-    if (study.flexibility() instanceof FlexibilityChoice.Truncated) {
-      refuse(study, findings, "'flexibility' with a number of modes");
-    }
-    if (study.measuredModes().isPresent()) {
-      refuse(study, findings, "'measuredModes'");
-    }
-  }
-
-  private static void refuse(Study study, Findings findings, String what) {
-    findings.add(
-        StudyFinding.NOT_SUPPORTED_YET, study.where(), what + " is not supported yet in an update");
   }
 
   private static void refuseUnknownCases(

@@ -227,7 +227,9 @@ final class InventedResults {
         new Comparison(
             CONFIGURATION, gauge(i), load(j), a, u, computed, OptionalDouble.of(a / computed),
             (a - computed) / u, OptionalDouble.of(updated), OptionalDouble.of(a / updated),
-            OptionalDouble.of((a - updated) / u), j == 0, unit));
+            OptionalDouble.of((a - updated) / u), j == 0,
+            OptionalDouble.empty(), OptionalDouble.empty(), OptionalDouble.empty(),
+            OptionalDouble.empty(), OptionalDouble.empty(), OptionalDouble.empty(), unit));
     contributions.add(
         new Contribution(CONFIGURATION, gauge(i), load(j), "joints.base.rz", 0.6 * a, unit));
     contributions.add(

@@ -6,6 +6,9 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
+import java.util.function.Function;
+import java.util.function.ToDoubleFunction;
 import org.flexbound.compare.CoefficientComparison;
 import org.flexbound.compare.ConfigurationComparison;
 import org.flexbound.report.results.Comparison;
@@ -77,9 +80,28 @@ final class ComparisonPart {
                       (c.measured() - after.getAsDouble()) / c.standardUncertainty())
                   : OptionalDouble.empty(),
               held,
+              modal(c, CoefficientComparison.Truncated::full),
+              count(c, CoefficientComparison.Truncated::within10),
+              count(c, CoefficientComparison.Truncated::within5),
+              count(c, CoefficientComparison.Truncated::within1),
+              modal(c, CoefficientComparison.Truncated::massless),
+              c.fromMeasuredModes(),
               units.getOrDefault(key, "")));
     }
     return result;
+  }
+
+  private static OptionalDouble modal(
+      CoefficientComparison c, ToDoubleFunction<CoefficientComparison.Truncated> part) {
+    return c.truncated().isPresent()
+        ? Values.finite(part.applyAsDouble(c.truncated().get()))
+        : OptionalDouble.empty();
+  }
+
+  private static OptionalDouble count(
+      CoefficientComparison c, Function<CoefficientComparison.Truncated, OptionalInt> part) {
+    OptionalInt count = c.truncated().map(part).orElse(OptionalInt.empty());
+    return count.isPresent() ? OptionalDouble.of(count.getAsInt()) : OptionalDouble.empty();
   }
 
   private static OptionalDouble optional(@org.jspecify.annotations.Nullable Double value) {

@@ -225,6 +225,15 @@ final class TableSection {
     if (updated) {
       table.number("Updated", "Ratio", "z");
     }
+    boolean modal = results.comparison().stream().anyMatch(c -> c.full().isPresent());
+    if (modal) {
+      table.number("All modes", "n to 10 %", "n to 5 %", "n to 1 %");
+    }
+    boolean measuredModes =
+        results.comparison().stream().anyMatch(c -> c.measuredModes().isPresent());
+    if (measuredModes) {
+      table.number("Measured modes");
+    }
     table.text("Unit");
     for (Comparison c : results.comparison()) {
       List<Block.Cell> row = new ArrayList<>();
@@ -244,10 +253,30 @@ final class TableSection {
         row.add(Block.Cell.of(ratio(c.updatedRatio())));
         row.add(c.updatedZ().isPresent() ? z(c.updatedZ().getAsDouble()) : Block.Cell.of("–"));
       }
+      if (modal) {
+        row.add(other(c.full(), c));
+        row.add(modes(c.modesWithin10()));
+        row.add(modes(c.modesWithin5()));
+        row.add(modes(c.modesWithin1()));
+      }
+      if (measuredModes) {
+        row.add(other(c.measuredModes(), c));
+      }
       row.add(Block.Cell.of(shown.symbol(c.unit())));
       table.row(row);
     }
     return table;
+  }
+
+  private Block.Cell other(java.util.OptionalDouble value, Comparison c) {
+    return Block.Cell.of(
+        value.isPresent()
+            ? shown.value(value.getAsDouble(), c.standardUncertainty(), c.unit())
+            : "–");
+  }
+
+  private static Block.Cell modes(java.util.OptionalDouble count) {
+    return Block.Cell.of(count.isPresent() ? Rounded.fixed(count.getAsDouble(), 0) : "more");
   }
 
   private static String ratio(java.util.OptionalDouble ratio) {

@@ -168,12 +168,15 @@ public final class ResultsWorkbook {
         new SheetWriter(
             workbook, styles, "Comparison", "Configuration", "Gauge", "Load", "Measured",
             "Standard uncertainty", "Nominal model", "Ratio", "z", "Updated model",
-            "Ratio, updated", "z, updated", "Held out", "Unit");
+            "Ratio, updated", "z, updated", "Held out", "All modes", "Modes within 10 %",
+            "Modes within 5 %", "Modes within 1 %", "Without mass", "Measured modes", "Unit");
     for (Comparison c : results.comparison()) {
       sheet.row(
           c.configuration(), c.gauge(), c.load(), shown(c.measured(), c.unit()),
           shown(c.standardUncertainty(), c.unit()), shown(c.computed(), c.unit()), c.ratio(), c.z(),
           shown(c.updated(), c.unit()), c.updatedRatio(), c.updatedZ(), c.heldOut(),
+          shown(c.full(), c.unit()), c.modesWithin10(), c.modesWithin5(), c.modesWithin1(),
+          shown(c.massless(), c.unit()), shown(c.measuredModes(), c.unit()),
           units.symbol(c.unit()));
     }
     sheet.finish();
