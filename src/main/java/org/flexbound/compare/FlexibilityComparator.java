@@ -108,12 +108,10 @@ public final class FlexibilityComparator {
         effect.map(TruncationEffect::coefficients).orElse(List.of());
     Optional<OptionalDouble[]> fromModes =
         modes.map(table -> ModeTable.coefficients(measured, table));
-    double[] uncertainty = new double[values.length];
     List<CoefficientComparison> coefficients = new ArrayList<>();
     for (int r = 0; r < values.length; r++) {
       Coefficient coefficient = measured.coefficients().get(r);
       double u = Math.sqrt(covariance[r][r]);
-      uncertainty[r] = u;
       int row = r;
       String gauge = measured.gauges().get(coefficient.gauge()).name();
       String load = measured.loads().get(coefficient.load()).name();
