@@ -8,7 +8,6 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.SortedSet;
-import java.util.TreeSet;
 import org.flexbound.finding.Where;
 
 /**
@@ -18,8 +17,6 @@ import org.flexbound.finding.Where;
 final class ColumnWatch {
   /** So many excursions, zeros and different values are kept; enough to tell what they are. */
   private static final int KEPT = 40;
-
-  private static final int DIFFERENT = 256;
 
   /**
    * A reading, or several equal ones, away from the readings before and after, on one side of both.
@@ -52,7 +49,9 @@ final class ColumnWatch {
 
   private final List<Excursion> excursions = new ArrayList<>();
   private final List<Zero> zeros = new ArrayList<>();
-  private final TreeSet<Double> different = new TreeSet<>();
+  private final DifferentValues different = new DifferentValues();
+  private int least;
+  private double leastSize;
   private Optional<Where> sample = Optional.empty();
   private int readings;
   private int blanks;
@@ -98,15 +97,16 @@ final class ColumnWatch {
     if (reading == 0 && zeros.size() < KEPT) {
       zeros.add(new Zero(row, loadThen));
     }
-    if (different.size() < DIFFERENT) {
-      different.add(reading);
-    }
     if (reading == value) {
       lastRow = row;
       equalInARow++;
       return;
     }
-    if (!Double.isNaN(value) && !Double.isNaN(before) && (value - before) * (value - reading) > 0) {
+    different.see(reading);
+    if (!Double.isNaN(value)
+        && !Double.isNaN(before)
+        && (value - before) * (value - reading) > 0
+        && isLarge(Math.min(Math.abs(value - before), Math.abs(value - reading)))) {
       keep(
           new Excursion(
               firstRow, lastRow, value, load, before, beforeLoad, reading, loadThen));
@@ -119,18 +119,23 @@ final class ColumnWatch {
     lastRow = row;
   }
 
+  /** Whether an excursion of this size would be kept: in noise nearly every second reading is one. */
+  private boolean isLarge(double size) {
+    return excursions.size() < KEPT || size > leastSize;
+  }
+
   private void keep(Excursion found) {
     if (excursions.size() == KEPT) {
-      int least = 0;
-      for (int k = 1; k < KEPT; k++) {
-        least = excursions.get(k).size() < excursions.get(least).size() ? k : least;
-      }
-      if (excursions.get(least).size() >= found.size()) {
-        return;
-      }
       excursions.remove(least);
     }
     excursions.add(found);
+    if (excursions.size() == KEPT) {
+      least = 0;
+      for (int k = 1; k < KEPT; k++) {
+        least = excursions.get(k).size() < excursions.get(least).size() ? k : least;
+      }
+      leastSize = excursions.get(least).size();
+    }
   }
 
   /** Excursions in the order of their rows, the largest ones where there were many. */
@@ -191,7 +196,7 @@ final class ColumnWatch {
 
   /** The different values that were read, the first of them where there were many. */
   Set<Double> values() {
-    return Collections.unmodifiableSet(different);
+    return Collections.unmodifiableSet(different.ordered());
   }
 
   /**
