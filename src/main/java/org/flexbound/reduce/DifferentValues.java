@@ -1,6 +1,7 @@
 package org.flexbound.reduce;
 
 import java.util.Arrays;
+import java.util.SortedSet;
 import java.util.TreeSet;
 
 /**
@@ -44,7 +45,7 @@ final class DifferentValues {
   }
 
   /** The values in ascending order. */
-  TreeSet<Double> ordered() {
+  SortedSet<Double> ordered() {
     return ordered;
   }
 }
