@@ -2,6 +2,8 @@ package org.flexbound.flexibility;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
+import java.util.TreeMap;
 
 /** Combines scatter, floors and gains into the standard uncertainty of each compared coefficient. */
 public final class CoefficientUncertainty {
@@ -9,21 +11,20 @@ public final class CoefficientUncertainty {
 
   /**
    * The compared coefficients with their combined uncertainty (JCGM 100:2008, 5.2) and effective
-   * degrees of freedom (Welch–Satterthwaite, G.4.1: only the scatter has finite ones).
+   * degrees of freedom (Welch–Satterthwaite, G.4.1: only the scatter has finite ones; parts of one
+   * row with the same degrees of freedom come from one pooled estimate and stand together).
    *
    * @param names gauge and load index of each row of the map
    * @param absolute the absolute coefficients
    * @param gains the gains
    * @param map from absolute to compared
-   * @param scatterDegreesOfFreedom of the pooled scatter
    * @return the coefficients in the order of the map's rows
    */
   public static List<Coefficient> coefficients(
       int[][] names,
       List<AbsoluteCoefficient> absolute,
       List<Gain> gains,
-      LinearMap map,
-      double scatterDegreesOfFreedom) {
+      LinearMap map) {
     double[] values = absolute.stream().mapToDouble(AbsoluteCoefficient::value).toArray();
     double[] compared = map.apply(values);
     double[] scatter = variance(map, absolute, true);
@@ -38,16 +39,32 @@ public final class CoefficientUncertainty {
     List<Coefficient> list = new ArrayList<>();
     for (int row = 0; row < names.length; row++) {
       double total = scatter[row] + floor[row] + gain[row];
-      double ratio = scatter[row] > 0 ? total / scatter[row] : Double.POSITIVE_INFINITY;
       list.add(
           new Coefficient(
               names[row][0],
               names[row][1],
               compared[row],
               Math.sqrt(total),
-              scatterDegreesOfFreedom * ratio * ratio));
+              degreesOfFreedom(map, row, absolute, total)));
     }
     return list;
+  }
+
+  private static double degreesOfFreedom(
+      LinearMap map, int row, List<AbsoluteCoefficient> absolute, double total) {
+    Map<Double, Double> pooled = new TreeMap<>();
+    int[] columns = map.columns(row);
+    double[] weights = map.weights(row);
+    for (int k = 0; k < columns.length; k++) {
+      AbsoluteCoefficient a = absolute.get(columns[k]);
+      double u = weights[k] * a.scatterUncertainty();
+      pooled.merge(a.scatterDegreesOfFreedom(), u * u, Double::sum);
+    }
+    double sum = 0;
+    for (Map.Entry<Double, Double> part : pooled.entrySet()) {
+      sum += part.getValue() * part.getValue() / part.getKey();
+    }
+    return sum > 0 ? total * total / sum : Double.POSITIVE_INFINITY;
   }
 
   /**

@@ -47,7 +47,7 @@ final class FlexibilityBuilder {
 
   MeasuredFlexibility build(RunPooling pooling) {
     List<AbsoluteCoefficient> absolute = new ArrayList<>();
-    for (RunPooling.Cell cell : pooling.cells()) {
+    for (SlopeCell cell : pooling.cells()) {
       absolute.add(absolute(cell, pooling));
     }
     return build(absolute, pooling.degreesOfFreedom());
@@ -80,10 +80,10 @@ final class FlexibilityBuilder {
         scatterFreedom,
         map,
         CoefficientUncertainty.coefficients(
-            names.toArray(int[][]::new), absolute, gains, map, scatterFreedom));
+            names.toArray(int[][]::new), absolute, gains, map));
   }
 
-  private AbsoluteCoefficient absolute(RunPooling.Cell cell, RunPooling pooling) {
+  private AbsoluteCoefficient absolute(SlopeCell cell, RunPooling pooling) {
     double mean = cell.mean();
     double span = loadSpan(cell);
     List<Integer> acting = new ArrayList<>();
@@ -98,12 +98,13 @@ final class FlexibilityBuilder {
       // two readings, each with the floor, over the load between them
       floor = Math.sqrt(2) * found.floorUncertainty().orElse(0) / span;
     }
+    floor = Math.hypot(floor, rounding(gauge, cell));
     if (load.isEmpty() || load.get().uncalibrated()) {
       calibrationIncluded = false;
     } else {
       Instrument found = load.get();
       found.gainUncertainty().ifPresent(u -> acting.add(gain(found, u)));
-      double relative = Math.sqrt(2) * found.floorUncertainty().orElse(0) / span;
+      double relative = Math.hypot(Math.sqrt(2) * found.floorUncertainty().orElse(0) / span, rounding(load, cell));
       if (relative > 0) {
         acting.add(
             index(
@@ -113,6 +114,16 @@ final class FlexibilityBuilder {
                     relative)));
       }
     }
+    double common = pooling.commonUncertainty(cell.load());
+    if (common > 0) {
+      acting.add(
+          index(
+              new Gain(
+                  "scatter of runs / " + problem.configuration() + " / " + cell.load(),
+                  "scatter from run to run that all gauges under " + cell.load() + " share",
+                  common,
+                  true)));
+    }
     return new AbsoluteCoefficient(
         indexOfGauge(cell.gauge()),
         indexOfLoad(cell.load()),
@@ -120,11 +131,44 @@ final class FlexibilityBuilder {
         pooling.uncertainty(cell),
         floor,
         acting,
-        cell.slopes().size());
+        cell.slopes().size(),
+        pooling.degreesOfFreedom(cell));
+  }
+
+  /**
+   * What rounding to an instrument's resolution does to a slope, per unit of the load (relative, for the load's instrument): an error of
+   * resolution/√12 in each step (JCGM 100:2008, F.2.2.1), once a step however many rows it has. Repeating does not reduce it, since the same
+   * loads are rounded the same way.
+   */
+  private static double rounding(Optional<Instrument> instrument, SlopeCell cell) {
+    double resolution = instrument.map(found -> found.resolution().orElse(0)).orElse(0.0);
+    if (!(resolution > 0)) {
+      return 0;
+    }
+    double spread = cell.slopes().stream().mapToDouble(FlexibilityBuilder::spread).average().orElse(0);
+    return spread > 0 ? resolution / Math.sqrt(12 * spread) : 0;
+  }
+
+  /** Σ (load less its branch's mean)² over the fitted steps. */
+  private static double spread(RunSlope slope) {
+    Map<Integer, double[]> branches = new LinkedHashMap<>();
+    for (LoadStep step : slope.steps()) {
+      if (step.fate() == LoadStep.Fate.FITTED) {
+        double[] sums = branches.computeIfAbsent(step.branch(), key -> new double[3]);
+        sums[0]++;
+        sums[1] += step.load();
+        sums[2] += step.load() * step.load();
+      }
+    }
+    double spread = 0;
+    for (double[] sums : branches.values()) {
+      spread += sums[2] - sums[1] * sums[1] / sums[0];
+    }
+    return spread;
   }
 
   /** Largest less smallest fitted load of the cell's runs, on the average. */
-  private static double loadSpan(RunPooling.Cell cell) {
+  private static double loadSpan(SlopeCell cell) {
     return cell.slopes().stream()
         .mapToDouble(
             slope -> {
@@ -240,6 +284,9 @@ final class FlexibilityBuilder {
     double total = 0;
     for (Map.Entry<Integer, Double> entry : own.entrySet()) {
       total += entry.getValue() * absolute.get(entry.getKey()).value();
+    }
+    if (base == 0 || total == 0) {
+      return;
     }
     double share = Math.abs(base / total);
     baseShares.put(Reduction.key(gauge.name(), load.name()), share);

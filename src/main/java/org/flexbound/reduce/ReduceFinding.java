@@ -69,6 +69,39 @@ public enum ReduceFinding implements FindingKind {
       Severity.WARNING,
       "Slopes of repeated runs differ by more than the limit.",
       "Look for slip between runs; repeat."),
+  /** A gauge scatters unlike the others. */
+  SCATTER_APART(
+      "RED-SCATTER-APART",
+      Severity.NOTE,
+      "A gauge's slopes scatter from run to run significantly more or less than those of the others; it has a"
+          + " scatter of its own.",
+      "Look at its stand and its tip if it scatters more."),
+  /** No repeat of a kind of coefficient. */
+  SCATTER_BORROWED(
+      "RED-SCATTER-BORROWED",
+      Severity.WARNING,
+      "A kind of coefficient was measured in one run only; its relative scatter was taken from coefficients"
+          + " that were repeated.",
+      "Repeat the run, or state the repeatability on the sheet Options."),
+  /** Repeats agree exactly. */
+  NO_SCATTER(
+      "RED-NO-SCATTER",
+      Severity.WARNING,
+      "Repeated runs agree to the last digit, which no real test does.",
+      "Check that the runs are not copies of one; state the resolution of the instruments, so that it enters the"
+          + " uncertainty."),
+  /** Measured scatter contradicts the stated repeatability. */
+  SCATTER_ABOVE_STATED(
+      "RED-SCATTER-ABOVE-STATED",
+      Severity.WARNING,
+      "Repeated runs scatter significantly more than the stated repeatability.",
+      "Look for slip between runs; correct the repeatability on the sheet Options."),
+  /** Measured scatter beside a stated repeatability. */
+  SCATTER_AND_STATED(
+      "RED-SCATTER-AND-STATED",
+      Severity.NOTE,
+      "Runs were repeated and a repeatability is stated: the larger of the two is used.",
+      "Nothing needs to be done."),
   /** A base motion cannot be taken out. */
   BASE_MOTION_LEFT(
       "RED-BASE-MOTION-LEFT",
