@@ -293,61 +293,30 @@ final class RunReducer {
         quality);
   }
 
-  /** Several loads that move independently: one regression, a column for each load. */
+  /** Several loads that move independently: one regression, then a slope for each with the others' parts taken out. */
   private List<RunSlope> several(int gauge, List<Integer> varied) {
     Channel gaugeChannel = run.gauges().get(gauge);
-    List<double[]> rows = new ArrayList<>();
-    List<Double> motions = new ArrayList<>();
-    for (StepGrouping.RawStep step : steps) {
-      if (step.counts[gauge] > 0) {
-        double[] row = new double[varied.size() + 1];
-        for (int k = 0; k < varied.size(); k++) {
-          row[k] = step.load[varied.get(k)];
-        }
-        row[varied.size()] = 1;
-        rows.add(row);
-        motions.add(step.motion[gauge]);
-      }
-    }
+    List<double[]> columns = varied.stream().map(this::column).toList();
+    double[] share = SeveralLoads.share(columns);
+    Branches branches = Branches.of(share);
+    cycles = Math.max(cycles, branches.cycles());
+    FitRange range = options.fitRange(gaugeChannel.name());
+    List<LoadStep> list = fated(gauge, share, branches, range);
+    noteExcluded(gaugeChannel, list);
     List<RunSlope> result = new ArrayList<>();
-    Optional<Regression> fit = Optional.empty();
     try {
-      fit =
-          Optional.of(
-              Regression.fit(
-                  rows.toArray(double[][]::new),
-                  motions.stream().mapToDouble(Double::doubleValue).toArray()));
+      SeveralLoads fit = SeveralLoads.fit(columns, list);
+      for (int k = 0; k < varied.size(); k++) {
+        double peak = java.util.Arrays.stream(columns.get(k)).map(Math::abs).max().orElse(0);
+        RunSlope alone = fitted(gaugeChannel, run.loads().get(varied.get(k)), fit.steps(k), range, peak);
+        result.add(alone.withStandardError(fit.standardError(k)));
+      }
     } catch (Regression.DependentColumns | IllegalArgumentException tooFew) {
       findings.add(
           ReduceFinding.TOO_FEW_STEPS,
           gaugeChannel.where(),
-          rows.size() + " steps of '" + gaugeChannel.name() + "' in run '" + run.name()
+          list.stream().filter(step -> step.fate() == Fate.FITTED).count() + " steps of '" + gaugeChannel.name() + "' in run '" + run.name()
               + "' are too few to tell " + varied.size() + " loads apart");
-    }
-    for (int k = 0; k < varied.size(); k++) {
-      double[] column = column(varied.get(k));
-      Branches branches = Branches.of(column);
-      cycles = Math.max(cycles, branches.cycles());
-      List<LoadStep> list = fated(gauge, column, branches, new FitRange(0, 1));
-      double peak = java.util.Arrays.stream(column).map(Math::abs).max().orElse(0);
-      int index = k;
-      Channel load = run.loads().get(varied.get(k));
-      result.add(
-          new RunSlope(
-              run.name(),
-              gaugeChannel.name(),
-              load.name(),
-              gaugeChannel.instrument(),
-              load.instrument(),
-              list.stream()
-                  .map(s -> s.fate() == Fate.BEDDING_IN ? s.withFate(Fate.FITTED) : s)
-                  .toList(),
-              fit.map(f -> f.coefficients()[index]).orElse(Double.NaN),
-              fit.map(f -> f.standardError(index)).orElse(Double.NaN),
-              Map.of(),
-              0,
-              peak,
-              Optional.empty()));
     }
     return result;
   }

@@ -61,4 +61,10 @@ public record RunSlope(
     Double intercept = intercepts.get(step.branch());
     return intercept == null ? Double.NaN : step.motion() - intercept - slope * step.load();
   }
+
+  /** The same slope with the standard error of a fit of several loads together. */
+  RunSlope withStandardError(double error) {
+    return new RunSlope(
+        run, gauge, load, gaugeInstrument, loadInstrument, steps, slope, error, intercepts, fitFrom, fitTo, quality);
+  }
 }

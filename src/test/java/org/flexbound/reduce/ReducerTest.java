@@ -3,13 +3,17 @@ package org.flexbound.reduce;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.List;
+import java.util.ArrayList;
 import java.util.Map;
+import java.util.OptionalDouble;
 import java.util.Optional;
 import java.util.Random;
 import org.flexbound.finding.Finding;
 import org.flexbound.finding.Outcome;
 import org.flexbound.flexibility.Coefficient;
 import org.flexbound.setup.Direction;
+import org.flexbound.setup.ReductionOptions;
 import org.flexbound.setup.Station;
 import org.flexbound.setup.Vector;
 import org.flexbound.testlog.TestLogMaker;
@@ -189,5 +193,104 @@ class ReducerTest {
         .filteredOn(step -> step.fate() == LoadStep.Fate.FITTED)
         .extracting(LoadStep::load)
         .contains(1000.0, -1000.0);
+  }
+
+  /** Two jacks: A goes up and down while B is held at three levels, twice; the first time A goes up the bracket beds in. */
+  private static double[][] twoJacks(double[] slopes, double scatter, Random random) {
+    List<double[]> rows = new ArrayList<>();
+    for (int round = 0; round < 2; round++) {
+      for (double b : new double[] {0, 500, 1000, 0}) {
+        for (double a : new double[] {0, 400, 800, 400, 0}) {
+          double bedding = rows.size() < 5 ? 3e-4 * Math.max(a / 800, rows.size() > 2 ? 1 : 0) : 3e-4;
+          rows.add(new double[] {a, b, bedding + slopes[0] * a + slopes[1] * b + scatter * random.nextGaussian()});
+        }
+      }
+    }
+    return rows.toArray(double[][]::new);
+  }
+
+  private static TestLogMaker underTwoJacks() {
+    return new TestLogMaker()
+        .instrument("cell", 0, 0, 0)
+        .instrument("dial", 0, 0, 0)
+        .load("LA", "A", DOWN, "cell")
+        .load("LB", "B", DOWN, "cell")
+        .gauge("GA", "A", DOWN, "dial", false);
+  }
+
+  @Test
+  void severalJacksAtOnceAreToldApartWithoutTheBeddingIn() {
+    TestLogMaker maker = underTwoJacks();
+    maker.run("1", List.of("LA", "LB"), twoJacks(new double[] {2e-6, 5e-6}, 0, new Random(1)));
+    Reduction reduction = reduce(maker);
+    assertThat(reduction.flexibility().coefficients().get(0).value()).isCloseTo(2e-6, within(1e-15));
+    assertThat(reduction.flexibility().coefficients().get(1).value()).isCloseTo(5e-6, within(1e-15));
+    assertThat(reduction.slopes()).allSatisfy(slope -> {
+      assertThat(slope.quality()).isPresent();
+      assertThat(slope.steps()).anyMatch(step -> step.fate() == LoadStep.Fate.BEDDING_IN);
+    });
+  }
+
+  @Test
+  void theSlopesOfSeveralJacksScatterAsTheirStandardErrorsSay() {
+    double squares = 0;
+    int tests = 200;
+    for (int test = 0; test < tests; test++) {
+      TestLogMaker maker = underTwoJacks();
+      maker.run("1", List.of("LA", "LB"), twoJacks(new double[] {2e-6, 5e-6}, 1e-5, new Random(100 + test)));
+      RunSlope slope = reduce(maker).slopes().get(1);
+      squares += Math.pow((slope.slope() - 5e-6) / slope.standardError(), 2);
+    }
+    // the mean square of Student's t with 20 or so degrees of freedom is 1.1; its standard error here 0.12
+    assertThat(squares / tests).isBetween(0.75, 1.5);
+  }
+
+  @Test
+  void aStatedRepeatabilityCountsWhereItIsLargerThanWhatWasSeen() {
+    double[][] a = {{2e-6, 5e-6}, {5e-6, 16e-6}};
+    TestLogMaker maker = twoByTwo(a, 1e-8, 3);
+    ReductionOptions usual = ReductionOptions.USUAL;
+    maker.options(
+        new ReductionOptions(
+            OptionalDouble.of(0.02), usual.fitRange(), Map.of(), usual.beddingIn(), usual.slopeFit(), usual.localGravity(),
+            usual.takeOutBaseMotion(), usual.qualityLimits(), usual.decisionRule()));
+    Reduction reduction = reduce(maker);
+    assertThat(reduction.flexibility().absolute()).allSatisfy(c ->
+        assertThat(c.scatterUncertainty()).isCloseTo(0.02 * c.value() / Math.sqrt(3), within(1e-6 * c.value())));
+    assertThat(reduction.findings()).extracting(Finding::code).contains("RED-SCATTER-AND-STATED");
+  }
+
+  @Test
+  void aRepeatabilityThatTheRunsContradictIsAFinding() {
+    double[][] a = {{2e-6, 5e-6}, {5e-6, 16e-6}};
+    TestLogMaker maker = twoByTwo(a, 4e-5, 3);
+    ReductionOptions usual = ReductionOptions.USUAL;
+    maker.options(
+        new ReductionOptions(
+            OptionalDouble.of(1e-4), usual.fitRange(), Map.of(), usual.beddingIn(), usual.slopeFit(), usual.localGravity(),
+            usual.takeOutBaseMotion(), usual.qualityLimits(), usual.decisionRule()));
+    assertThat(reduce(maker).findings()).extracting(Finding::code).contains("RED-SCATTER-ABOVE-STATED");
+  }
+
+  @Test
+  void copiedRunsAreNoRepeats() {
+    double[][] a = {{2e-6, 5e-6}, {5e-6, 16e-6}};
+    assertThat(reduce(twoByTwo(a, 0, 3)).findings()).extracting(Finding::code).contains("RED-NO-SCATTER");
+  }
+
+  @Test
+  void resolutionLeavesAnUncertaintyWhereNothingScatters() {
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0, 0, 0)
+            .instrument("dial", 0, 0, 1e-5)
+            .load("LA", "A", DOWN, "cell")
+            .gauge("GA", "A", DOWN, "dial", false);
+    for (int run = 0; run < 3; run++) {
+      maker.run("r" + run, "LA", rows(new double[] {2e-6}, 0, new Random(1)));
+    }
+    Coefficient c = reduce(maker).flexibility().coefficients().get(0);
+    // fitted loads up 200 to 1000 and down 800 to 200, each about its own mean: 400 000 + 200 000 N²
+    assertThat(c.standardUncertainty()).isCloseTo(1e-5 / Math.sqrt(12 * 600_000.0), within(1e-12));
   }
 }

@@ -114,12 +114,25 @@ public final class TestLogMaker {
    * @param rows for each row the load, then the gauges, SI; NaN for blank
    */
   public TestLogMaker run(String name, String load, double[][] rows) {
+    return run(name, List.of(load), rows);
+  }
+
+  /**
+   * Adds a run of several loads.
+   *
+   * @param name the run's name
+   * @param names the loads' names
+   * @param rows for each row the loads, then the gauges, SI; NaN for blank
+   */
+  public TestLogMaker run(String name, List<String> names, double[][] rows) {
     List<Channel> gaugeChannels =
         gauges.values().stream()
             .map(g -> new Channel(g.name(), g.name(), Unit.METRE, g.instrument(), Where.nowhere()))
             .toList();
-    Channel loadChannel =
-        new Channel(load, load, Unit.NEWTON, loads.get(load).instrument(), Where.nowhere());
+    List<Channel> loadChannels =
+        names.stream()
+            .map(load -> new Channel(load, load, Unit.NEWTON, loads.get(load).instrument(), Where.nowhere()))
+            .toList();
     runs.add(
         new Run(
             name,
@@ -127,11 +140,11 @@ public final class TestLogMaker {
             OptionalDouble.empty(),
             true,
             "",
-            List.of(loadChannel),
+            loadChannels,
             gaugeChannels,
             visitor -> {
               for (int r = 0; r < rows.length; r++) {
-                visitor.visit(new ArrayReading(rows[r], r + 2));
+                visitor.visit(new ArrayReading(rows[r], names.size(), r + 2));
               }
             },
             Where.sheet("made", name)));
@@ -153,10 +166,12 @@ public final class TestLogMaker {
 
   private static final class ArrayReading implements Reading {
     private final double[] values;
+    private final int loads;
     private final int row;
 
-    ArrayReading(double[] values, int row) {
+    ArrayReading(double[] values, int loads, int row) {
       this.values = values;
+      this.loads = loads;
       this.row = row;
     }
 
@@ -167,12 +182,12 @@ public final class TestLogMaker {
 
     @Override
     public double load(int channel) {
-      return values[0];
+      return values[channel];
     }
 
     @Override
     public double gauge(int channel) {
-      return values[1 + channel];
+      return values[loads + channel];
     }
 
     @Override
