@@ -155,7 +155,7 @@ final class InventedResults {
                 CONFIGURATION,
                 OptionalDouble.of(17),
                 List.of(List.of(1e-20, 0.0), List.of(0.0, 1e-20)),
-                List.of(new SharedFactor("cell / cert 1", "load cell", 0.005, List.of(1e-9, 2e-9))))),
+                List.of(new SharedFactor("cell / cert 1", "load cell", 0.005, List.of(1e-9, 2e-9), false)))),
         List.of(),
         List.of(),
         List.of(

@@ -229,7 +229,11 @@ final class ReductionPart {
       Gain gain = flexibility.gains().get(g);
       factors.add(
           new SharedFactor(
-              gain.key(), gain.description(), gain.priorUncertainty(), Values.list(effects[g])));
+              gain.key(),
+              gain.description(),
+              gain.priorUncertainty(),
+              Values.list(effects[g]),
+              gain.ofOneTest()));
     }
     return new Covariance(
         configuration(),

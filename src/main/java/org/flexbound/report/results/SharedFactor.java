@@ -10,12 +10,15 @@ import java.util.List;
  * @param priorUncertainty standard uncertainty (k = 1), relative
  * @param effect what one standard uncertainty of it changes in each coefficient, SI; in the
  *     order of the coefficients of this configuration
+ * @param ofOneTest true where the error belongs to this test alone and does not cancel against
+ *     another test under the same calibration
  */
 public record SharedFactor(
     String key,
     String description,
     double priorUncertainty,
-    List<Double> effect) {
+    List<Double> effect,
+    boolean ofOneTest) {
   /** Copies the lists. */
   public SharedFactor {
     effect = List.copyOf(effect);
