@@ -109,10 +109,10 @@ class PublishedFitsTest {
             numbers(check.get("weightY")));
     double tolerance = check.get("tolerance").asDouble();
     assertThat(line.slope()).isCloseTo(check.get("slope").asDouble(), within(tolerance));
-    assertThat(line.intercept()).isCloseTo(check.get("intercept").asDouble(), within(tolerance));
+    assertThat(line.intercepts().get(0)).isCloseTo(check.get("intercept").asDouble(), within(tolerance));
     assertThat(line.slopeStandardError())
         .isCloseTo(check.get("slopeStandardError").asDouble(), within(tolerance));
-    assertThat(line.interceptStandardError())
+    assertThat(line.interceptStandardErrors().get(0))
         .isCloseTo(check.get("interceptStandardError").asDouble(), within(tolerance));
     assertThat(line.sumOfSquares())
         .isCloseTo(check.get("sumOfSquares").asDouble(), within(100 * tolerance));
