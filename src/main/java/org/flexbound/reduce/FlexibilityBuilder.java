@@ -98,7 +98,7 @@ final class FlexibilityBuilder {
       // two readings, each with the floor, over the load between them
       floor = Math.sqrt(2) * found.floorUncertainty().orElse(0) / span;
     }
-    floor = Math.hypot(floor, rounding(gauge, cell));
+    floor = Math.hypot(Math.hypot(floor, rounding(gauge, cell)), treatment(cell));
     if (load.isEmpty() || load.get().uncalibrated()) {
       calibrationIncluded = false;
     } else {
@@ -133,6 +133,14 @@ final class FlexibilityBuilder {
         acting,
         cell.slopes().size(),
         pooling.degreesOfFreedom(cell));
+  }
+
+  /**
+   * What remains open between drift and set: the difference of the two slopes is the half width of an even distribution (JCGM 100:2008, 4.3.7),
+   * the mean over runs, since runs are treated alike.
+   */
+  private static double treatment(SlopeCell cell) {
+    return cell.slopes().stream().mapToDouble(RunSlope::otherTreatment).average().orElse(0) / Math.sqrt(3);
   }
 
   /**

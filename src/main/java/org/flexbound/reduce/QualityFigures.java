@@ -1,19 +1,18 @@
 package org.flexbound.reduce;
 
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.flexbound.statistics.GroupedLine;
+import org.flexbound.statistics.Kink;
 
 /** Works out the quality figures of a fitted slope. */
 final class QualityFigures {
-  /** Steps below this share of the peak load count as unloaded. */
-  private static final double UNLOADED = 0.02;
-
   private QualityFigures() {}
 
   static SlopeQuality of(
-      List<LoadStep> all,
+      ZeroReturn zero,
       List<LoadStep> used,
       GroupedLine line,
       GroupedLine.Curvature curvature,
@@ -32,9 +31,17 @@ final class QualityFigures {
         gap(used, line) * share,
         curvature.departure() * share,
         curvature.probability(),
-        zeroReturn(all),
+        zero.share(),
         span > 0 ? resolution / span : Double.NaN,
-        used.size());
+        used.size(),
+        zero.kind(),
+        SlopePair.loadingAndUnloading(used, line.slope()),
+        SlopePair.pullAndPush(used, line.slope()),
+        Kink.search(
+            used.stream().mapToDouble(LoadStep::load).toArray(),
+            used.stream().mapToDouble(LoadStep::motion).toArray(),
+            used.stream().mapToInt(LoadStep::branch).toArray()),
+        Arrays.stream(line.regression().studentisedDeletedResiduals()).boxed().toList());
   }
 
   /** The largest distance between the lines of the rising and the falling branch of one cycle. */
@@ -53,24 +60,5 @@ final class QualityFigures {
       }
     }
     return gap;
-  }
-
-  private static double zeroReturn(List<LoadStep> all) {
-    List<LoadStep> read =
-        all.stream().filter(step -> !Double.isNaN(step.motion())).toList();
-    if (read.size() < 3) {
-      return Double.NaN;
-    }
-    double peak = read.stream().mapToDouble(step -> Math.abs(step.load())).max().orElse(0);
-    LoadStep first = read.get(0);
-    LoadStep last = read.get(read.size() - 1);
-    if (Math.abs(first.load()) > UNLOADED * peak || Math.abs(last.load()) > UNLOADED * peak) {
-      return Double.NaN;
-    }
-    double motion = 0;
-    for (LoadStep step : read) {
-      motion = Math.max(motion, Math.abs(step.motion() - first.motion()));
-    }
-    return motion > 0 ? (last.motion() - first.motion()) / motion : 0;
   }
 }

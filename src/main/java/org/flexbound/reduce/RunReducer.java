@@ -12,6 +12,7 @@ import org.flexbound.setup.BeddingIn;
 import org.flexbound.setup.FitRange;
 import org.flexbound.setup.Load;
 import org.flexbound.setup.ReductionOptions;
+import org.flexbound.setup.SlopeFit;
 import org.flexbound.statistics.GroupedLine;
 import org.flexbound.statistics.Regression;
 import org.flexbound.testlog.Channel;
@@ -226,7 +227,7 @@ final class RunReducer {
     List<LoadStep> list = fated(gauge, column, branches, range);
     double peak = java.util.Arrays.stream(column).map(Math::abs).max().orElse(0);
     noteExcluded(gaugeChannel, list);
-    return fitted(gaugeChannel, run.loads().get(load), list, range, peak);
+    return fitted(gauge, run.loads().get(load), load, list, range, peak);
   }
 
   private void noteExcluded(Channel gauge, List<LoadStep> list) {
@@ -249,28 +250,49 @@ final class RunReducer {
   }
 
   private RunSlope fitted(
-      Channel gauge, Channel load, List<LoadStep> list, FitRange range, double peak) {
-    List<LoadStep> used = list.stream().filter(step -> step.fate() == Fate.FITTED).toList();
+      int index, Channel load, int loadIndex, List<LoadStep> list, FitRange range, double peak) {
+    Channel gauge = run.gauges().get(index);
+    List<LoadStep> used = new ArrayList<>();
+    List<StepGrouping.RawStep> usedRaw = new ArrayList<>();
+    for (int k = 0; k < list.size(); k++) {
+      if (list.get(k).fate() == Fate.FITTED) {
+        used.add(list.get(k));
+        usedRaw.add(steps.get(k));
+      }
+    }
     double[] x = used.stream().mapToDouble(LoadStep::load).toArray();
     double[] y = used.stream().mapToDouble(LoadStep::motion).toArray();
     int[] branch = used.stream().mapToInt(LoadStep::branch).toArray();
-    double slope = Double.NaN;
-    double error = Double.NaN;
-    Map<Integer, Double> intercepts = Map.of();
+    SlopeFitter.Fit fit =
+        new SlopeFitter.Fit(SlopeFit.ORDINARY, Double.NaN, Double.NaN, Map.of());
     Optional<SlopeQuality> quality = Optional.empty();
+    double other = 0;
     try {
       GroupedLine line = GroupedLine.fit(x, y, branch);
-      slope = line.slope();
-      error = line.slopeStandardError();
-      intercepts = line.intercepts();
+      double resolution = resolutions.getOrDefault(gauge.instrument().orElse(""), Double.NaN);
+      double ofLoad = resolutions.getOrDefault(load.instrument().orElse(""), Double.NaN);
+      fit =
+          new SlopeFitter(
+                  x,
+                  y,
+                  branch,
+                  new HeldScatter(steps, step -> step.readings, step -> step.loadSquares[loadIndex], ofLoad).variances(usedRaw),
+                  new HeldScatter(steps, step -> step.counts[index], step -> step.squares[index], resolution).variances(usedRaw),
+                  line)
+              .fit(options.slopeFit());
+      ZeroReadings zeros = new ZeroReadings(list, steps, index);
+      ZeroReturn zero = zeros.of(line.slope());
       quality =
           Optional.of(
-              QualityFigures.of(
-                  list,
-                  used,
-                  line,
-                  GroupedLine.curvature(x, y, branch),
-                  resolutions.getOrDefault(gauge.instrument().orElse(""), Double.NaN)));
+              QualityFigures.of(zero, used, line, GroupedLine.curvature(x, y, branch), resolution));
+      if (zero.kind() != ZeroReturn.Kind.NOT_READ) {
+        double without = zeros.withoutDrift();
+        double change = Double.isNaN(without) ? 0 : without - line.slope();
+        other = Math.abs(change);
+        if (zero.kind() == ZeroReturn.Kind.DRIFT) {
+          fit = new SlopeFitter.Fit(fit.how(), fit.slope() + change, fit.standardError(), fit.intercepts());
+        }
+      }
     } catch (Regression.DependentColumns | IllegalArgumentException tooFew) {
       findings.add(
           ReduceFinding.TOO_FEW_STEPS,
@@ -285,12 +307,14 @@ final class RunReducer {
         gauge.instrument(),
         load.instrument(),
         list,
-        slope,
-        error,
-        intercepts,
+        fit.slope(),
+        fit.standardError(),
+        fit.intercepts(),
         range.lower() * peak,
         range.upper() * peak,
-        quality);
+        quality,
+        fit.how(),
+        other);
   }
 
   /** Several loads that move independently: one regression, then a slope for each with the others' parts taken out. */
@@ -308,7 +332,7 @@ final class RunReducer {
       SeveralLoads fit = SeveralLoads.fit(columns, list);
       for (int k = 0; k < varied.size(); k++) {
         double peak = java.util.Arrays.stream(columns.get(k)).map(Math::abs).max().orElse(0);
-        RunSlope alone = fitted(gaugeChannel, run.loads().get(varied.get(k)), fit.steps(k), range, peak);
+        RunSlope alone = fitted(gauge, run.loads().get(varied.get(k)), varied.get(k), fit.steps(k), range, peak);
         result.add(alone.withStandardError(fit.standardError(k)));
       }
     } catch (Regression.DependentColumns | IllegalArgumentException tooFew) {

@@ -5,6 +5,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import org.flexbound.setup.SlopeFit;
 
 /**
  * What one gauge showed for one load in one run: its steps and, where there were enough, the slope.
@@ -22,6 +23,8 @@ import java.util.Optional;
  * @param fitFrom lower end of the fit range, magnitude of the load
  * @param fitTo upper end of the fit range
  * @param quality the quality figures; empty where there is no slope
+ * @param fit how the slope was fitted; never automatic
+ * @param otherTreatment how far the slope would lie from this one were drift taken for set, or set for drift; 0 where there are no zeros
  */
 public record RunSlope(
     String run,
@@ -35,7 +38,9 @@ public record RunSlope(
     Map<Integer, Double> intercepts,
     double fitFrom,
     double fitTo,
-    Optional<SlopeQuality> quality) {
+    Optional<SlopeQuality> quality,
+    SlopeFit fit,
+    double otherTreatment) {
   /** Copies the collections. */
   public RunSlope {
     steps = List.copyOf(steps);
@@ -65,6 +70,6 @@ public record RunSlope(
   /** The same slope with the standard error of a fit of several loads together. */
   RunSlope withStandardError(double error) {
     return new RunSlope(
-        run, gauge, load, gaugeInstrument, loadInstrument, steps, slope, error, intercepts, fitFrom, fitTo, quality);
+        run, gauge, load, gaugeInstrument, loadInstrument, steps, slope, error, intercepts, fitFrom, fitTo, quality, fit, otherTreatment);
   }
 }

@@ -25,18 +25,24 @@ final class StepGrouping {
     final String label;
     final double[] load;
     final double[] largestLoad;
+    final double[] loadSquares;
     final double[] motion;
     final double[] squares;
+    final double[] timeMotion;
     final int[] counts;
     final Where[] where;
+    double time;
+    double timeSquares;
     int readings;
 
     RawStep(String label, int loads, int gauges) {
       this.label = label;
       this.load = new double[loads];
       this.largestLoad = new double[loads];
+      this.loadSquares = new double[loads];
       this.motion = new double[gauges];
       this.squares = new double[gauges];
+      this.timeMotion = new double[gauges];
       this.counts = new int[gauges];
       this.where = new Where[gauges];
     }
@@ -44,8 +50,14 @@ final class StepGrouping {
     /** Welford's updating of mean and sum of squares (Technometrics 4, 1962, 419). */
     void add(Reading reading) {
       readings++;
+      double moment = Double.isNaN(reading.time()) ? reading.row() : reading.time();
+      double earlier = moment - time;
+      time += earlier / readings;
+      timeSquares += earlier * (moment - time);
       for (int l = 0; l < load.length; l++) {
-        load[l] += (reading.load(l) - load[l]) / readings;
+        double off = reading.load(l) - load[l];
+        load[l] += off / readings;
+        loadSquares[l] += off * (reading.load(l) - load[l]);
         largestLoad[l] = Math.max(largestLoad[l], Math.abs(reading.load(l)));
       }
       for (int g = 0; g < motion.length; g++) {
@@ -59,11 +71,25 @@ final class StepGrouping {
         double before = value - motion[g];
         motion[g] += before / counts[g];
         squares[g] += before * (value - motion[g]);
+        timeMotion[g] += before * (moment - time);
       }
     }
 
     double motion(int gauge) {
       return counts[gauge] == 0 ? Double.NaN : motion[gauge];
+    }
+
+    /**
+     * How fast a gauge moved while the load was held, per unit of time (or row), and its standard error; NaN with fewer than four readings.
+     */
+    double[] creep(int gauge) {
+      int n = counts[gauge];
+      if (n < 4 || n != readings || !(timeSquares > 0)) {
+        return new double[] {Double.NaN, Double.NaN};
+      }
+      double rate = timeMotion[gauge] / timeSquares;
+      double left = Math.max(0, squares[gauge] - rate * timeMotion[gauge]);
+      return new double[] {rate, Math.sqrt(left / (n - 2) / timeSquares)};
     }
 
     double scatter(int gauge) {

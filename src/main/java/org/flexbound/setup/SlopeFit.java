@@ -9,5 +9,7 @@ public enum SlopeFit {
   /** Errors in both variables (York et al. 2004). */
   BOTH_VARIABLES,
   /** A fit that outlying steps move little. */
-  ROBUST
+  ROBUST,
+  /** Least squares of motion on load, each step weighted by its own scatter and resolution. */
+  WEIGHTED
 }

@@ -14,12 +14,14 @@ import java.util.Map;
  * @param slopeStandardError its standard error from the residuals; NaN without degrees of freedom
  * @param intercepts group to intercept
  * @param regression the fit behind it: groups first, the slope last
+ * @param spread Σ (x less the mean of its group)²
  */
 public record GroupedLine(
     double slope,
     double slopeStandardError,
     Map<Integer, Double> intercepts,
-    Regression regression) {
+    Regression regression,
+    double spread) {
   /** Copies the map. */
   public GroupedLine {
     intercepts = Collections.unmodifiableMap(new LinkedHashMap<>(intercepts));
@@ -45,7 +47,21 @@ public record GroupedLine(
       // the design is centred; the intercept is at x = 0
       intercepts.put(design.groups.get(g), b[g] - b[last] * design.centre);
     }
-    return new GroupedLine(b[last], regression.standardError(last), intercepts, regression);
+    return new GroupedLine(
+        b[last], regression.standardError(last), intercepts, regression, spread(x, group));
+  }
+
+  private static double spread(double[] x, int[] group) {
+    Map<Integer, double[]> sums = new LinkedHashMap<>();
+    for (int k = 0; k < x.length; k++) {
+      double[] sum = sums.computeIfAbsent(group[k], key -> new double[3]);
+      // Welford's update, which does not lose the spread in the size of the mean
+      double before = x[k] - sum[1];
+      sum[0]++;
+      sum[1] += before / sum[0];
+      sum[2] += before * (x[k] - sum[1]);
+    }
+    return sums.values().stream().mapToDouble(sum -> sum[2]).sum();
   }
 
   /**

@@ -22,7 +22,6 @@ import org.flexbound.setup.Instrument;
 import org.flexbound.setup.LimitSpec;
 import org.flexbound.setup.Load;
 import org.flexbound.setup.ReductionOptions;
-import org.flexbound.setup.SlopeFit;
 import org.flexbound.setup.StatedCoefficient;
 
 /** Makes a test log of tables of entries and sheets of readings; all problems come in one answer. */
@@ -151,12 +150,6 @@ final class LogReader {
           "acceptance limits are not supported yet");
     }
     Where sheet = tables.where(SheetLayout.OPTIONS);
-    if (options.slopeFit() == SlopeFit.BOTH_VARIABLES || options.slopeFit() == SlopeFit.ROBUST) {
-      findings.add(
-          TestlogFinding.NOT_SUPPORTED_YET,
-          sheet,
-          "the slope fits 'both variables' and 'robust' are not supported yet");
-    }
     if (options.decisionRule() != DecisionRule.GUARD_BAND) {
       findings.add(
           TestlogFinding.NOT_SUPPORTED_YET,

@@ -43,7 +43,7 @@ final class OptionsReader {
     items.put("Fit range lower", "lower end of the fit, % of the peak load; usually 10");
     items.put("Fit range upper", "upper end of the fit, % of the peak load; usually 100");
     items.put("First cycle", "leave out, or keep");
-    items.put("Slope fit", "automatic, ordinary, both variables or robust");
+    items.put("Slope fit", "automatic, ordinary, both variables, robust or weighted");
     items.put("Local gravity", "m/s², for loads stated in kg");
     items.put("Base motion", "take out, or leave");
     items.put("Linearity limit", "% of span");
@@ -137,7 +137,7 @@ final class OptionsReader {
                 choice(
                     common,
                     "Slope fit",
-                    List.of("automatic", "ordinary", "both variables", "robust"))),
+                    List.of("automatic", "ordinary", "both variables", "robust", "weighted"))),
         gravity(common),
         choice(common, "Base motion", List.of("take out", "leave")) == 0,
         quality,

@@ -9,13 +9,16 @@ import java.util.Map;
 import java.util.OptionalDouble;
 import java.util.Optional;
 import java.util.Random;
+import java.util.function.IntToDoubleFunction;
 import org.flexbound.finding.Finding;
 import org.flexbound.finding.Outcome;
 import org.flexbound.flexibility.Coefficient;
 import org.flexbound.setup.Direction;
 import org.flexbound.setup.ReductionOptions;
+import org.flexbound.setup.SlopeFit;
 import org.flexbound.setup.Station;
 import org.flexbound.setup.Vector;
+import org.flexbound.statistics.GroupedLine;
 import org.flexbound.testlog.TestLogMaker;
 import org.junit.jupiter.api.Test;
 
@@ -90,7 +93,9 @@ class ReducerTest {
     double[][] a = {{2e-6, 5e-6}, {5e-6, 16e-6}};
     Reduction reduction = reduce(twoByTwo(a, 1e-7, 3));
     Coefficient c = reduction.flexibility().coefficients().get(0);
-    double floor = Math.sqrt(2) * 1e-6 / 800;
+    double floor = reduction.flexibility().absolute().get(0).floorUncertainty();
+    // the floor at both ends of the fitted loads; what is open between drift and set adds next to nothing
+    assertThat(floor).isCloseTo(Math.sqrt(2) * 1e-6 / 800, within(1e-4 * floor));
     double expected =
         Math.sqrt(
             Math.pow(c.value() * Math.hypot(0.01, 0.002), 2)
@@ -292,5 +297,128 @@ class ReducerTest {
     Coefficient c = reduce(maker).flexibility().coefficients().get(0);
     // fitted loads up 200 to 1000 and down 800 to 200, each about its own mean: 400 000 + 200 000 N²
     assertThat(c.standardUncertainty()).isCloseTo(1e-5 / Math.sqrt(12 * 600_000.0), within(1e-12));
+  }
+
+  /** One gauge through cycles with held loads; what it shows beside its line is a function of row and cycle. */
+  private static TestLogMaker oneGauge(int cycles, ReductionOptions options, IntToDoubleFunction beside) {
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0, 0, 0)
+            .instrument("dial", 0, 0, 0)
+            .load("LA", "A", DOWN, "cell")
+            .gauge("GA", "A", DOWN, "dial", false)
+            .options(options);
+    List<double[]> rows = new ArrayList<>();
+    for (int cycle = 0; cycle < cycles; cycle++) {
+      for (int k = 0; k < 12; k++) {
+        double load = 1000 * (k <= 6 ? k : 12 - k) / 6.0;
+        for (int held = 0; held < 5; held++) {
+          rows.add(new double[] {load, 2e-6 * load + beside.applyAsDouble(rows.size())});
+        }
+      }
+    }
+    for (int held = 0; held < 5; held++) {
+      rows.add(new double[] {0, beside.applyAsDouble(rows.size())});
+    }
+    return maker.run("1", "LA", rows.toArray(double[][]::new));
+  }
+
+  private static ReductionOptions fitted(SlopeFit how) {
+    ReductionOptions usual = ReductionOptions.USUAL;
+    return new ReductionOptions(usual.statedRepeatability(), usual.fitRange(), Map.of(), usual.beddingIn(), how, usual.localGravity(),
+        usual.takeOutBaseMotion(), usual.qualityLimits(), usual.decisionRule());
+  }
+
+  @Test
+  void whatGoesOnAtNoLoadIsDriftAndIsTakenOut() {
+    Random random = new Random(2);
+    Reduction reduction = reduce(oneGauge(1, ReductionOptions.USUAL, row -> 4e-6 * row + 1e-7 * random.nextGaussian()));
+    RunSlope slope = reduction.slopes().get(0);
+    assertThat(slope.quality().orElseThrow().zero()).isEqualTo(ZeroReturn.Kind.DRIFT);
+    assertThat(slope.slope()).isCloseTo(2e-6, within(1e-9));
+  }
+
+  @Test
+  void whatDoesNotComeBackIsSetAndTheOtherTreatmentIsCarried() {
+    // rises with the load only on the way up: at the top it has moved for good
+    Reduction reduction = reduce(oneGauge(1, ReductionOptions.USUAL, row -> row < 35 ? 2e-7 * row : 7e-6));
+    RunSlope slope = reduction.slopes().get(0);
+    assertThat(slope.quality().orElseThrow().zero()).isEqualTo(ZeroReturn.Kind.SET);
+    assertThat(slope.quality().orElseThrow().zeroReturn()).isCloseTo(7e-6 / 2.007e-3, within(1e-4));
+    assertThat(reduction.flexibility().absolute().get(0).floorUncertainty())
+        .isCloseTo(slope.otherTreatment() / Math.sqrt(3), within(1e-15));
+  }
+
+  @Test
+  void zerosThatMoveOnFromCycleToCycleAreDrift() {
+    Reduction reduction = reduce(oneGauge(3, ReductionOptions.USUAL, row -> 2e-6 * (row / 60)));
+    assertThat(reduction.slopes().get(0).quality().orElseThrow().zero()).isEqualTo(ZeroReturn.Kind.DRIFT);
+    reduction = reduce(oneGauge(3, ReductionOptions.USUAL, row -> row < 60 ? 0 : 2e-6));
+    assertThat(reduction.slopes().get(0).quality().orElseThrow().zero()).isEqualTo(ZeroReturn.Kind.SET);
+  }
+
+  @Test
+  void aRobustFitIsNotMovedByAMisreadStep() {
+    IntToDoubleFunction misread = row -> (row >= 25 && row < 30 ? 4e-4 : 0) + 1e-7 * Math.sin(row);
+    assertThat(reduce(oneGauge(1, fitted(SlopeFit.ROBUST), misread)).slopes().get(0).slope()).isCloseTo(2e-6, within(2e-9));
+    assertThat(reduce(oneGauge(1, fitted(SlopeFit.ORDINARY), misread)).slopes().get(0).slope()).isNotCloseTo(2e-6, within(2e-8));
+  }
+
+  @Test
+  void theFitThatWasUsedIsSaid() {
+    IntToDoubleFunction noise = row -> 1e-6 * Math.sin(12.9898 * row);
+    assertThat(reduce(oneGauge(1, fitted(SlopeFit.AUTOMATIC), noise)).slopes().get(0).fit()).isEqualTo(SlopeFit.ORDINARY);
+    assertThat(reduce(oneGauge(1, fitted(SlopeFit.WEIGHTED), noise)).slopes().get(0).fit()).isEqualTo(SlopeFit.WEIGHTED);
+    // a load that is exact leaves nothing to weigh in both variables
+    assertThat(reduce(oneGauge(1, fitted(SlopeFit.BOTH_VARIABLES), noise)).slopes().get(0).fit()).isEqualTo(SlopeFit.ORDINARY);
+  }
+
+  @Test
+  void aLoadThatScattersWhileHeldDoesNotBiasTheSlope() {
+    Random random = new Random(11);
+    double sum = 0;
+    double ordinary = 0;
+    int tests = 60;
+    for (int test = 0; test < tests; test++) {
+      TestLogMaker maker =
+          new TestLogMaker()
+              .instrument("cell", 0, 0, 0)
+              .instrument("dial", 0, 0, 0)
+              .load("LA", "A", DOWN, "cell")
+              .gauge("GA", "A", DOWN, "dial", false);
+      List<double[]> rows = new ArrayList<>();
+      for (int k = 0; k < 24; k++) {
+        double load = 1000 + 500.0 * (k % 12 <= 6 ? k % 12 : 12 - k % 12) / 6;
+        for (int held = 0; held < 4; held++) {
+          rows.add(new double[] {load + (held < 3 ? 1 : -3) * 9 * random.nextGaussian(), 2e-6 * load + 1e-6 * random.nextGaussian()});
+        }
+      }
+      Reduction reduction = reduce(maker.run("1", "LA", rows.toArray(double[][]::new)));
+      sum += reduction.slopes().get(0).slope() / tests;
+      List<LoadStep> used = reduction.slopes().get(0).steps().stream().filter(s -> s.fate() == LoadStep.Fate.FITTED).toList();
+      ordinary += GroupedLine.fit(used.stream().mapToDouble(LoadStep::load).toArray(),
+          used.stream().mapToDouble(LoadStep::motion).toArray(), used.stream().mapToInt(LoadStep::branch).toArray()).slope() / tests;
+    }
+    assertThat(Math.abs(sum - 2e-6)).isLessThan(Math.abs(ordinary - 2e-6));
+  }
+
+  @Test
+  void pullAndPushAreHeldAgainstEachOther() {
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0, 0, 0)
+            .instrument("dial", 0, 0, 0)
+            .load("LA", "A", DOWN, "cell")
+            .gauge("GA", "A", DOWN, "dial", false);
+    double[][] pull = rows(new double[] {2e-6}, 1e-6, new Random(1));
+    double[][] both = new double[22][];
+    for (int k = 0; k < 11; k++) {
+      both[k] = pull[k];
+      both[11 + k] = new double[] {-pull[k][0], 0.001 - 3e-6 * pull[k][0] + 1e-6 * Math.cos(k)};
+    }
+    SlopePair pair = reduce(maker.run("1", "LA", both)).slopes().get(0).quality().orElseThrow().pullPush().orElseThrow();
+    assertThat(pair.first()).isCloseTo(2e-6, within(1e-8));
+    assertThat(pair.second()).isCloseTo(3e-6, within(1e-8));
+    assertThat(pair.probability()).isLessThan(1e-6);
   }
 }
