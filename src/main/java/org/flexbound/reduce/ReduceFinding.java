@@ -11,6 +11,19 @@ public enum ReduceFinding implements FindingKind {
       Severity.WARNING,
       "No load varied in a run.",
       "Check the load column, or say no in the column Use of the sheet Runs."),
+  /** Readings on the way from one held load to the next. */
+  RAMPS_LEFT_OUT(
+      "RED-RAMPS-LEFT-OUT",
+      Severity.NOTE,
+      "Readings taken while the load went from one held value to the next are left out.",
+      "Nothing needs to be done. To choose the steps yourself, fill in a column Step."),
+  /** No held load. */
+  NEVER_HELD(
+      "RED-NEVER-HELD",
+      Severity.WARNING,
+      "The load stood still nowhere, so no reading was taken at rest.",
+      "Hold each load until the readings stand still; if the loads were held, fill in a column Step that says which"
+          + " rows belong together."),
   /** Two loads moved in proportion. */
   PROPORTIONAL(
       "RED-PROPORTIONAL",

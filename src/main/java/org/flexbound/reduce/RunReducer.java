@@ -20,9 +20,6 @@ import org.flexbound.testlog.Run;
 
 /** Reduces one run: steps, branches, a slope for every gauge and varied load. */
 final class RunReducer {
-  /** A load whose range is below this share of the largest did not vary: an idle cell wanders. */
-  private static final double VARIED = 1e-2;
-
   /** Loads whose correlation leaves less than this unexplained moved in proportion. */
   private static final double PROPORTIONAL = 1e-4;
 
@@ -50,10 +47,59 @@ final class RunReducer {
     this.options = options;
     this.resolutions = resolutions;
     this.findings = findings;
-    StepGrouping grouping = StepGrouping.of(run);
-    this.steps = grouping.steps();
+    boolean[] moment = new boolean[run.loads().size()];
+    for (int l = 0; l < moment.length; l++) {
+      moment[l] = isMoment(l);
+    }
+    StepGrouping grouping = StepGrouping.of(run, moment);
     this.excluded.addAll(grouping.excluded());
     this.watch = grouping.watch();
+    this.steps = held(grouping.steps(), moment);
+  }
+
+  /** Leaves out the ramps between held loads, and says so. */
+  private List<StepGrouping.RawStep> held(List<StepGrouping.RawStep> groups, boolean[] moment) {
+    HeldSteps held = HeldSteps.of(groups, varies(groups, moment));
+    if (!held.ramps().isEmpty()) {
+      int rows = held.ramps().stream().mapToInt(ramp -> ramp.readings).sum();
+      Where first = held.ramps().get(0).whereLoad;
+      findings.add(
+          ReduceFinding.RAMPS_LEFT_OUT,
+          first,
+          "run '"
+              + run.name()
+              + "': "
+              + rows
+              + " readings, the first of them here, were taken while the load went from one held value to the next; they are left out");
+      excluded.add(new Exclusion(run.name(), "rows between held loads", first, "the load was on its way", false, rows));
+    }
+    if (!held.everHeld()) {
+      findings.add(
+          ReduceFinding.NEVER_HELD,
+          run.where(),
+          "the load stood still nowhere in run '"
+              + run.name()
+              + "'; its readings were gathered into "
+              + groups.size()
+              + " steps of about the same load");
+    }
+    return held.held();
+  }
+
+  private static boolean[] varies(List<StepGrouping.RawStep> groups, boolean[] moment) {
+    double[] low = new double[moment.length];
+    double[] high = new double[moment.length];
+    for (int l = 0; l < moment.length; l++) {
+      int load = l;
+      low[l] = groups.stream().mapToDouble(group -> group.load[load]).min().orElse(0);
+      high[l] = groups.stream().mapToDouble(group -> group.load[load]).max().orElse(0);
+    }
+    double[] shares = StepGrouping.shares(low, high, moment);
+    boolean[] varies = new boolean[moment.length];
+    for (int l = 0; l < moment.length; l++) {
+      varies[l] = shares[l] >= StepGrouping.VARIED;
+    }
+    return varies;
   }
 
   List<RunSlope> slopes() {
@@ -107,36 +153,13 @@ final class RunReducer {
     return steps.stream().mapToDouble(step -> step.load[load]).toArray();
   }
 
-  private static double range(double[] values) {
-    double low = Double.POSITIVE_INFINITY;
-    double high = Double.NEGATIVE_INFINITY;
-    for (double value : values) {
-      low = Math.min(low, value);
-      high = Math.max(high, value);
-    }
-    return values.length == 0 ? 0 : high - low;
-  }
-
   private List<Integer> varied() {
-    double[] ranges = new double[run.loads().size()];
-    double forces = 0;
-    double moments = 0;
-    for (int l = 0; l < ranges.length; l++) {
-      ranges[l] = range(column(l));
-      if (isMoment(l)) {
-        moments = Math.max(moments, ranges[l]);
-      } else {
-        forces = Math.max(forces, ranges[l]);
-      }
+    boolean[] moment = new boolean[run.loads().size()];
+    for (int l = 0; l < moment.length; l++) {
+      moment[l] = isMoment(l);
     }
-    List<Integer> varied = new ArrayList<>();
-    for (int l = 0; l < ranges.length; l++) {
-      double largest = isMoment(l) ? moments : forces;
-      if (ranges[l] > 0 && ranges[l] >= VARIED * largest) {
-        varied.add(l);
-      }
-    }
-    return varied;
+    boolean[] varies = varies(steps, moment);
+    return java.util.stream.IntStream.range(0, varies.length).filter(l -> varies[l]).boxed().toList();
   }
 
   private boolean isMoment(int load) {
