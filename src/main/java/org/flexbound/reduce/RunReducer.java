@@ -47,10 +47,7 @@ final class RunReducer {
     this.options = options;
     this.resolutions = resolutions;
     this.findings = findings;
-    boolean[] moment = new boolean[run.loads().size()];
-    for (int l = 0; l < moment.length; l++) {
-      moment[l] = isMoment(l);
-    }
+    boolean[] moment = moments();
     StepGrouping grouping = StepGrouping.of(run, moment);
     this.excluded.addAll(grouping.excluded());
     this.watch = grouping.watch();
@@ -154,17 +151,17 @@ final class RunReducer {
   }
 
   private List<Integer> varied() {
-    boolean[] moment = new boolean[run.loads().size()];
-    for (int l = 0; l < moment.length; l++) {
-      moment[l] = isMoment(l);
-    }
-    boolean[] varies = varies(steps, moment);
+    boolean[] varies = varies(steps, moments());
     return java.util.stream.IntStream.range(0, varies.length).filter(l -> varies[l]).boxed().toList();
   }
 
-  private boolean isMoment(int load) {
-    Load known = loads.get(run.loads().get(load).name());
-    return known != null && known.isMoment();
+  private boolean[] moments() {
+    boolean[] moment = new boolean[run.loads().size()];
+    for (int l = 0; l < moment.length; l++) {
+      Load known = loads.get(run.loads().get(l).name());
+      moment[l] = known != null && known.isMoment();
+    }
+    return moment;
   }
 
   /** Two loads that moved in proportion cannot be told apart. */

@@ -59,11 +59,9 @@ final class LogReader {
     TestInformation information = sheets.information();
     Unit length = sheets.lengthUnit();
     List<Instrument> instruments = sheets.instruments();
+    OptionsReader optionsReader = new OptionsReader(cells, findings);
     ReductionOptions options =
-        sheets
-            .table(SheetLayout.OPTIONS)
-            .map(table -> new OptionsReader(cells, findings).read(table))
-            .orElse(ReductionOptions.USUAL);
+        sheets.table(SheetLayout.OPTIONS).map(optionsReader::read).orElse(ReductionOptions.USUAL);
     Optional<EntryTable> coefficients =
         sheets.table(SheetLayout.COEFFICIENTS).filter(table -> !table.entries().isEmpty());
     boolean stated = coefficients.isPresent();
@@ -101,19 +99,20 @@ final class LogReader {
               claims.addAll(reader.claims());
             });
     checkNames(claims, instruments);
-    options
-        .fitRangeByGauge()
-        .keySet()
+    List<String> gaugeNames = gauges.stream().map(Gauge::name).toList();
+    optionsReader
+        .gauges()
         .forEach(
-            gauge -> {
-              if (gauges.stream().noneMatch(found -> found.name().equals(gauge))) {
+            (gauge, where) -> {
+              if (!gaugeNames.contains(gauge)) {
                 findings.add(
                     TestlogFinding.UNKNOWN_NAME,
-                    tables.where(SheetLayout.OPTIONS),
+                    where,
                     "found '"
                         + gauge
                         + "'; expected a gauge of the "
-                        + tables.name(SheetLayout.GAUGES));
+                        + tables.name(SheetLayout.GAUGES)
+                        + NearestWord.question(gauge, gaugeNames));
               }
             });
     List<Run> runs = stated ? List.of() : runs(claims, options);

@@ -1,5 +1,6 @@
 package org.flexbound.testlog;
 
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -9,6 +10,7 @@ import java.util.OptionalDouble;
 import java.util.function.UnaryOperator;
 import org.flexbound.document.EntryTable;
 import org.flexbound.finding.Findings;
+import org.flexbound.finding.Where;
 import org.flexbound.quantity.Dimension;
 import org.flexbound.quantity.NearestWord;
 import org.flexbound.quantity.Unit;
@@ -29,6 +31,7 @@ final class OptionsReader {
 
   private final EntryCells cells;
   private final Findings findings;
+  private final Map<String, Where> gauges = new LinkedHashMap<>();
 
   OptionsReader(EntryCells cells, Findings findings) {
     this.cells = cells;
@@ -58,10 +61,15 @@ final class OptionsReader {
     return items;
   }
 
+  /** The gauges for which something was set, each with the first cell that names it. */
+  Map<String, Where> gauges() {
+    return Collections.unmodifiableMap(gauges);
+  }
+
   ReductionOptions read(EntryTable table) {
     Map<String, EntryTable.Entry> common = new LinkedHashMap<>();
-    Map<String, Double> lower = new LinkedHashMap<>();
-    Map<String, Double> upper = new LinkedHashMap<>();
+    Map<String, EntryTable.Entry> lower = new LinkedHashMap<>();
+    Map<String, EntryTable.Entry> upper = new LinkedHashMap<>();
     for (EntryTable.Entry entry : table.entries()) {
       Optional<String> item =
           ITEMS.keySet().stream()
@@ -83,9 +91,11 @@ final class OptionsReader {
       } else if (gauge.isEmpty()) {
         common.put(item.get(), entry);
       } else if (item.get().equals("Fit range lower")) {
-        percent(entry).ifPresent(value -> lower.put(gauge.get(), value));
+        gauges.putIfAbsent(gauge.get(), entry.get("Gauge").where());
+        lower.put(gauge.get(), entry);
       } else if (item.get().equals("Fit range upper")) {
-        percent(entry).ifPresent(value -> upper.put(gauge.get(), value));
+        gauges.putIfAbsent(gauge.get(), entry.get("Gauge").where());
+        upper.put(gauge.get(), entry);
       } else {
         findings.add(
             TestlogFinding.OPTION,
@@ -97,7 +107,9 @@ final class OptionsReader {
   }
 
   private ReductionOptions options(
-      Map<String, EntryTable.Entry> common, Map<String, Double> lower, Map<String, Double> upper) {
+      Map<String, EntryTable.Entry> common,
+      Map<String, EntryTable.Entry> lower,
+      Map<String, EntryTable.Entry> upper) {
     ReductionOptions usual = ReductionOptions.USUAL;
     FitRange range =
         range(
@@ -106,13 +118,16 @@ final class OptionsReader {
             Optional.ofNullable(common.get("Fit range lower"))
                 .or(() -> Optional.ofNullable(common.get("Fit range upper"))));
     Map<String, FitRange> byGauge = new LinkedHashMap<>();
-    lower.forEach(
-        (gauge, value) ->
-            byGauge.put(
-                gauge, range(value, upper.getOrDefault(gauge, range.upper()), Optional.empty())));
-    upper.forEach(
-        (gauge, value) ->
-            byGauge.putIfAbsent(gauge, range(range.lower(), value, Optional.empty())));
+    for (String gauge : gauges.keySet()) {
+      Optional<EntryTable.Entry> from = Optional.ofNullable(lower.get(gauge));
+      Optional<EntryTable.Entry> to = Optional.ofNullable(upper.get(gauge));
+      byGauge.put(
+          gauge,
+          range(
+              from.map(this::percent).orElse(OptionalDouble.empty()).orElse(range.lower()),
+              to.map(this::percent).orElse(OptionalDouble.empty()).orElse(range.upper()),
+              from.or(() -> to)));
+    }
     QualityLimits q = usual.qualityLimits();
     QualityLimits quality =
         new QualityLimits(

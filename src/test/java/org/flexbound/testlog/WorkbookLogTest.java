@@ -18,6 +18,8 @@ import org.apache.poi.ss.usermodel.CellStyle;
 import org.apache.poi.xssf.usermodel.XSSFWorkbook;
 import org.flexbound.finding.Finding;
 import org.flexbound.finding.Outcome;
+import org.flexbound.setup.FitRange;
+import org.flexbound.setup.ReductionOptions;
 import org.flexbound.setup.GaugeKind;
 import org.flexbound.setup.Station;
 import org.flexbound.setup.Vector;
@@ -139,6 +141,33 @@ class WorkbookLogTest {
     assertThat(outcome.findings())
         .extracting(Finding::code)
         .contains("LOG-COLUMN-CLAIMED-TWICE");
+  }
+
+  @Test
+  void aGaugeMayHaveItsOwnFitRange() {
+    WorkbookMaker maker = twoPoints();
+    maker.row("Options", "Item", "Entry", "Gauge");
+    maker.row("Options", "Fit range lower", 20, null);
+    maker.row("Options", "Fit range upper", 60, "at mid");
+    ReductionOptions options = read(maker).value().orElseThrow().options();
+    assertThat(options.fitRange("at tip")).isEqualTo(new FitRange(0.2, 1));
+    assertThat(options.fitRange("at mid")).isEqualTo(new FitRange(0.2, 0.6));
+  }
+
+  @Test
+  void aFitRangeThatCannotBeIsNamedWithItsCellAlsoForOneGauge() {
+    WorkbookMaker maker = twoPoints();
+    maker.row("Options", "Item", "Entry", "Gauge");
+    maker.row("Options", "Fit range lower", 70, "at mid");
+    maker.row("Options", "Fit range upper", 60, "at mid");
+    maker.row("Options", "Fit range upper", 60, "at midd");
+    maker.row("Options", "Linearity limit", 1, "at mid");
+    assertThat(read(maker).findings())
+        .extracting(finding -> finding.code() + " " + finding.where())
+        .containsExactlyInAnyOrder(
+            "LOG-OUT-OF-RANGE log.xlsx, sheet Options, cell B2",
+            "LOG-UNKNOWN-NAME log.xlsx, sheet Options, cell C4",
+            "LOG-OPTION log.xlsx, sheet Options, cell C5");
   }
 
   @Test
