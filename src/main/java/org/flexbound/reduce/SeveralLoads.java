@@ -3,6 +3,7 @@ package org.flexbound.reduce;
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import java.util.function.ToIntFunction;
 import org.flexbound.statistics.Regression;
@@ -54,17 +55,21 @@ final class SeveralLoads {
   static SeveralLoads fit(List<double[]> loads, List<LoadStep> steps) {
     List<ToIntFunction<LoadStep>> groupings = List.of(LoadStep::branch, LoadStep::cycle);
     for (ToIntFunction<LoadStep> grouping : groupings) {
-      try {
-        SeveralLoads fit = fit(loads, steps, grouping);
-        if (fit.regression.degreesOfFreedom() > 0) {
-          return fit;
-        }
-      } catch (Regression.DependentColumns | IllegalArgumentException tooFew) {
-        // the next grouping asks less of the steps
-        continue;
+      Optional<SeveralLoads> fit = attempt(loads, steps, grouping);
+      if (fit.isPresent() && fit.get().regression.degreesOfFreedom() > 0) {
+        return fit.get();
       }
     }
     return fit(loads, steps, step -> 0);
+  }
+
+  /** Empty where the steps do not suffice: the next grouping asks less of them. */
+  private static Optional<SeveralLoads> attempt(List<double[]> loads, List<LoadStep> steps, ToIntFunction<LoadStep> grouping) {
+    try {
+      return Optional.of(fit(loads, steps, grouping));
+    } catch (Regression.DependentColumns | IllegalArgumentException tooFew) {
+      return Optional.empty();
+    }
   }
 
   private static SeveralLoads fit(List<double[]> loads, List<LoadStep> steps, ToIntFunction<LoadStep> group) {

@@ -18,35 +18,23 @@ public record CommonScatter(double variance, double upper, double degreesOfFreed
   /** An estimate below this many standard errors is not told from none. */
   private static final double SEEN = 2;
 
-  /**
-   * Series that were repeated together.
-   *
-   * @param values repeats × series; NaN where a series was not repeated
-   * @param variances the variance of one repeat of each series, above 0
-   */
-  public record RepeatedTogether(double[][] values, double[] variances) {
-    /** Copies the arrays. */
-    public RepeatedTogether {
-      double[][] rows = new double[values.length][];
-      for (int r = 0; r < rows.length; r++) {
-        rows[r] = values[r].clone();
-      }
-      values = rows;
-      variances = variances.clone();
-    }
+  /** Series that were repeated together. */
+  public static final class RepeatedTogether {
+    private final double[][] values;
+    private final double[] variances;
 
-    @Override
-    public double[][] values() {
-      double[][] rows = new double[values.length][];
-      for (int r = 0; r < rows.length; r++) {
-        rows[r] = values[r].clone();
+    /**
+     * Copies.
+     *
+     * @param values repeats × series; NaN where a series was not repeated
+     * @param variances the variance of one repeat of each series, above 0
+     */
+    public RepeatedTogether(double[][] values, double[] variances) {
+      this.values = new double[values.length][];
+      for (int r = 0; r < values.length; r++) {
+        this.values[r] = values[r].clone();
       }
-      return rows;
-    }
-
-    @Override
-    public double[] variances() {
-      return variances.clone();
+      this.variances = variances.clone();
     }
   }
 
@@ -61,12 +49,12 @@ public record CommonScatter(double variance, double upper, double degreesOfFreed
     double weights = 0;
     double degrees = 0;
     for (RepeatedTogether set : sets) {
-      double[][] values = set.values();
+      double[][] values = set.values;
       int repeats = values.length;
       if (repeats < 2) {
         continue;
       }
-      double[] variances = set.variances();
+      double[] variances = set.variances;
       double[] means = means(values, variances.length);
       double correction = repeats / (repeats - 1.0);
       boolean any = false;

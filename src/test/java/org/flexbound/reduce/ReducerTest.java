@@ -350,7 +350,7 @@ class ReducerTest {
 
   @Test
   void zerosThatMoveOnFromCycleToCycleAreDrift() {
-    Reduction reduction = reduce(oneGauge(3, ReductionOptions.USUAL, row -> 2e-6 * (row / 60)));
+    Reduction reduction = reduce(oneGauge(3, ReductionOptions.USUAL, row -> 2e-6 * Math.floorDiv(row, 60)));
     assertThat(reduction.slopes().get(0).quality().orElseThrow().zero()).isEqualTo(ZeroReturn.Kind.DRIFT);
     reduction = reduce(oneGauge(3, ReductionOptions.USUAL, row -> row < 60 ? 0 : 2e-6));
     assertThat(reduction.slopes().get(0).quality().orElseThrow().zero()).isEqualTo(ZeroReturn.Kind.SET);
