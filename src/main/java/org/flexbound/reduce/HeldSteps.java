@@ -69,7 +69,7 @@ record HeldSteps(List<StepGrouping.RawStep> held, List<StepGrouping.RawStep> ram
     int usual = usual(still);
     if (usual < BY_HAND) {
       boolean labelled = groups.stream().anyMatch(group -> !group.label.isEmpty());
-      boolean held = labelled || onTheWay <= rows / 2 && groups.size() <= MOST_STEPS * Math.max(1, branches);
+      boolean held = labelled || (onTheWay <= rows / 2 && groups.size() <= MOST_STEPS * Math.max(1, branches));
       return new HeldSteps(groups, List.of(), held);
     }
     List<StepGrouping.RawStep> held = new ArrayList<>();

@@ -32,7 +32,7 @@ final class RowNoise {
     for (int bin = 0; bin < counts.length && seen > 0; bin++) {
       left -= counts[bin];
       if (left < 0) {
-        return bin == 0 ? 0 : Double.longBitsToDouble((long) bin << SHIFT | 1L << SHIFT - 1) / OF_NORMAL;
+        return bin == 0 ? 0 : Double.longBitsToDouble(((long) bin << SHIFT) | (1L << (SHIFT - 1))) / OF_NORMAL;
       }
     }
     return 0;

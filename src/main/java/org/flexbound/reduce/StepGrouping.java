@@ -161,7 +161,7 @@ final class StepGrouping {
     for (int l = 0; l < loads; l++) {
       double range = high[l] - low[l];
       double wide = NOISE * noise[l].standardDeviation();
-      boolean idle = shares[l] < VARIED || shares[l] < SMALL && wide > ALL_NOISE * range;
+      boolean idle = shares[l] < VARIED || (shares[l] < SMALL && wide > ALL_NOISE * range);
       // the noise of a cell that only idles must not part the steps of another
       tolerance[l] =
           idle
