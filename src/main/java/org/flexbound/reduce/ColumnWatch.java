@@ -201,7 +201,8 @@ final class ColumnWatch {
 
   /**
    * The step in which readings go, where they all lie on a grid of it; empty where they do not, or
-   * where they are too few to say.
+   * where they are too few to say. Equal load steps make such a grid as well, without any scatter about
+   * the line.
    *
    * @param values different readings of one instrument
    */
@@ -221,15 +222,12 @@ final class ColumnWatch {
       }
       previous = v;
     }
-    int several = 0;
     for (double gap : gaps) {
       double times = gap / step;
       if (Math.abs(times - Math.rint(times)) > 0.02) {
         return OptionalDouble.empty();
       }
-      several += Math.rint(times) > 1 ? 1 : 0;
     }
-    // equal gaps alone may be equal load steps
-    return gaps.size() >= 4 && several >= 2 ? OptionalDouble.of(step) : OptionalDouble.empty();
+    return gaps.size() >= 4 ? OptionalDouble.of(step) : OptionalDouble.empty();
   }
 }

@@ -22,7 +22,7 @@ record GaugeFault(
   /** Whether curvature, hysteresis and the like of this gauge in this run are only its symptoms. */
   boolean explainsDepartures() {
     return switch (kind) {
-      case STUCK, SATURATED, JUMPED, SLIPPED, DROPPED_OUT, SPIKE, LOAD_ZERO -> true;
+      case STUCK, SATURATED, JUMPED, SLIPPED, DROPPED_OUT, SPIKE, LOAD_ZERO, DRIFT, KINK, OUTLIER -> true;
       case OUT_OF_RANGE, COARSE, LOAD_LEFT, LOAD_LIMIT, OFF_LINE -> false;
     };
   }

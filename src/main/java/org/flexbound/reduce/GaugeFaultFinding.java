@@ -35,6 +35,24 @@ public enum GaugeFaultFinding implements FindingKind {
       Severity.WARNING,
       "Several gauges step at once and stay there, which no load explains.",
       "Look for slip or set in a joint or in the clamping; bed the structure in and repeat."),
+  /** A drift. */
+  DRIFT(
+      "RED-DRIFT",
+      Severity.WARNING,
+      "A gauge drifts through a run.",
+      "Let temperatures settle; look at the gauge's stand; repeat the run."),
+  /** A kink. */
+  KINK(
+      "RED-KINK",
+      Severity.WARNING,
+      "A gauge's slope changes at one load.",
+      "Look for a joint that slips or a gap that closes there; fit the range below or above it."),
+  /** One bad step. */
+  OUTLIER(
+      "RED-OUTLIER",
+      Severity.WARNING,
+      "One step of a gauge lies off its line.",
+      "Look at its rows; say no in their column Use if they are a mistake: nothing was left out."),
   /** Readings lost. */
   DROPPED_OUT(
       "RED-DROPPED-OUT",

@@ -37,10 +37,17 @@ record LogFault(String name, List<String> sizes, Set<String> codes, Injector inj
 
   // ---- where a fault goes ----
 
+  /** Any gauge but a base gauge that some load moves. */
   private static int someGauge(SimulatedTest test) {
+    double largest = 0;
+    for (int i = 0; i < test.gauges.size(); i++) {
+      largest = Math.max(largest, test.movement(i, test.bestLoad(i)));
+    }
     List<Integer> free = new ArrayList<>();
     for (int i = 0; i < test.gauges.size(); i++) {
-      if (!test.gauges.get(i).base()) {
+      // a gauge that no load moves can have no fault that its readings show
+      boolean moves = test.movement(i, test.bestLoad(i)) > 0.05 * largest;
+      if (!test.gauges.get(i).base() && moves) {
         free.add(i);
       }
     }
