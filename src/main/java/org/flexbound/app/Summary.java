@@ -96,10 +96,15 @@ final class Summary {
           Rounded.value(value, u),
           Rounded.uncertainty(u),
           units.symbol(c.unit()),
-          optional(c.degreesOfFreedom(), 2, "∞"));
+          freedom(c.degreesOfFreedom()));
     }
     table.print(out);
     more(results.coefficients().size());
+  }
+
+  /** Degrees of freedom; from a thousand on they make no difference. */
+  private static String freedom(OptionalDouble degrees) {
+    return degrees.isPresent() && degrees.getAsDouble() < 1000 ? Rounded.significant(degrees.getAsDouble(), 2) : "∞";
   }
 
   private void more(int all) {

@@ -84,6 +84,7 @@ final class Drawing {
     trim(root);
     Compaction.compact(root);
     dropUnusedClips(root);
+    TextWidths.fix(root);
     return write(root);
   }
 

@@ -7,6 +7,9 @@ import org.flexbound.report.results.Parameter;
 
 /** Values in the reader's units, rounded. */
 final class Shown {
+  /** From so many degrees of freedom on, Student's t is the normal to three digits. */
+  private static final double MANY = 1000;
+
   private final UnitSystem units;
 
   Shown(UnitSystem units) {
@@ -79,9 +82,9 @@ final class Shown {
     return value.isPresent() ? Rounded.significant(value.getAsDouble(), digits) : "–";
   }
 
-  /** Degrees of freedom; infinite where left out. */
+  /** Degrees of freedom; infinite where left out, or where it makes no difference. */
   static String freedom(OptionalDouble value) {
-    return value.isPresent() ? Rounded.significant(value.getAsDouble(), 2) : "∞";
+    return value.isPresent() && value.getAsDouble() < MANY ? Rounded.significant(value.getAsDouble(), 2) : "∞";
   }
 
   static String count(long number, String one, String many) {

@@ -40,6 +40,7 @@ final class TableSection {
     new MatrixTables(results).add(blocks);
     add(blocks, comparison());
     add(blocks, parameters());
+    add(blocks, priors());
     add(blocks, gains());
     add(blocks, validation());
     return new Section("tables", "Tables", blocks);
@@ -286,11 +287,33 @@ final class TableSection {
   private TableMaker parameters() {
     TableMaker table =
         new TableMaker("Parameters")
-            .text("Parameter", "Scales")
+            .text("Parameter")
             .number("Nominal", "Updated", "Factor")
-            .text("95 % interval", "Bounds")
-            .number("Prior sd", "Posterior sd", "Variance removed")
-            .text("Status", "Justification and notes");
+            .text("95 % interval", "Status")
+            .number("Variance removed");
+    for (Parameter p : results.parameters()) {
+      table.row(
+          List.of(
+              Block.Cell.of(p.name()),
+              Block.Cell.of(shown.stiffness(p, p.nominal(), "rigid")),
+              Block.Cell.of(shown.stiffness(p, p.updated(), "rigid")),
+              Block.Cell.of(Shown.optional(p.factor(), 3)),
+              Block.Cell.of(shown.interval(p)),
+              new Block.Cell(
+                  p.status() + (p.onBound() ? ", on its bound" : ""),
+                  p.status().equals("identified") && !p.onBound() ? Tone.GOOD : Tone.WARN),
+              Block.Cell.of(Rounded.percent(p.varianceRemoved()))));
+    }
+    return table;
+  }
+
+  /** What was laid down before the test, and the reasons. */
+  private TableMaker priors() {
+    TableMaker table =
+        new TableMaker("Parameters: bounds, prior and reasons (standard deviations in the working variable)")
+            .text("Parameter", "Scales", "Bounds")
+            .number("Prior sd", "Posterior sd")
+            .text("Justification and notes");
     for (Parameter p : results.parameters()) {
       List<String> notes = new ArrayList<>();
       if (!p.justification().isEmpty()) {
@@ -314,20 +337,12 @@ final class TableSection {
           List.of(
               Block.Cell.of(p.name()),
               Block.Cell.of(String.join(", ", p.scales())),
-              Block.Cell.of(shown.stiffness(p, p.nominal(), "rigid")),
-              Block.Cell.of(shown.stiffness(p, p.updated(), "rigid")),
-              Block.Cell.of(Shown.optional(p.factor(), 3)),
-              Block.Cell.of(shown.interval(p)),
               Block.Cell.of(
                   shown.stiffness(p, p.lowerBound(), "free")
                       + " to "
                       + shown.stiffness(p, p.upperBound(), "rigid")),
               Block.Cell.of(Rounded.significant(p.priorStandardDeviation(), 2)),
               Block.Cell.of(Rounded.significant(p.posteriorStandardDeviation(), 2)),
-              Block.Cell.of(Rounded.percent(p.varianceRemoved())),
-              new Block.Cell(
-                  p.status() + (p.onBound() ? ", on its bound" : ""),
-                  p.status().equals("identified") && !p.onBound() ? Tone.GOOD : Tone.WARN),
               Block.Cell.of(String.join("; ", notes))));
     }
     return table;
