@@ -5,6 +5,8 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import org.flexbound.compare.OutsideTable;
+import org.flexbound.document.InputFolder;
 import org.flexbound.document.Json;
 import org.flexbound.document.JsonFile;
 import org.flexbound.document.ReadProgress;
@@ -14,16 +16,20 @@ import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Refusal;
 import org.flexbound.finding.Where;
 import org.flexbound.flexibility.MeasuredModes;
+import org.flexbound.flexibility.OutsideFlexibility;
 import org.flexbound.flexibility.OutsideTableReader;
 import org.flexbound.frame.FrameChanges;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.FrameReader;
+import org.flexbound.reduce.Places;
 import org.flexbound.solve.FrameFlexibility;
 import org.flexbound.study.Configuration;
+import org.flexbound.study.Parameter;
 import org.flexbound.study.Study;
 import org.flexbound.study.StudyFinding;
 import org.flexbound.study.StudyReader;
 import org.flexbound.testlog.InputFile;
+import org.flexbound.testlog.LogContext;
 import org.flexbound.testlog.LogFile;
 import org.flexbound.testlog.TestLog;
 import org.flexbound.testlog.WorkbookLog;
@@ -33,7 +39,8 @@ import org.flexbound.testlog.WorkbookLog;
  * answer.
  *
  * @param study the study
- * @param model its frame model
+ * @param frame its frame model; empty where the model is held elsewhere
+ * @param tables the tables of a model held elsewhere; none where the frame model is used
  * @param tested one for each configuration
  * @param modes the table of measured modes, where the study names one
  * @param inputs the files that were read
@@ -41,7 +48,8 @@ import org.flexbound.testlog.WorkbookLog;
  */
 record StudyFiles(
     Study study,
-    FrameModel model,
+    Optional<FrameModel> frame,
+    List<OutsideTable> tables,
     List<Tested> tested,
     Optional<MeasuredModes> modes,
     List<InputFile> inputs,
@@ -53,11 +61,31 @@ record StudyFiles(
    * @param configuration its name
    * @param file the log's file, as the study names it
    * @param log the log
-   * @param model the model with the configuration's changes
+   * @param frame the model with the configuration's changes; empty where the model is held
+   *     elsewhere
    * @param changes those changes, as text
    */
   record Tested(
-      String configuration, String file, TestLog log, FrameModel model, List<String> changes) {}
+      String configuration,
+      String file,
+      TestLog log,
+      Optional<FrameModel> frame,
+      List<String> changes) {
+    /** The model, which there is unless it is held elsewhere. */
+    FrameModel model() {
+      return frame.orElseThrow(() -> new IllegalStateException("the model is held elsewhere"));
+    }
+
+    /** Where stations are: in the model, or as the log states. */
+    Places places() {
+      return frame.<Places>map(ModelPlaces::new).orElse(Places.STATED);
+    }
+  }
+
+  /** The frame model, which there is unless it is held elsewhere. */
+  FrameModel model() {
+    return frame.orElseThrow(() -> new IllegalStateException("the model is held elsewhere"));
+  }
 
   /**
    * Reads a study.
@@ -68,25 +96,40 @@ record StudyFiles(
    * @throws Refusal with the problems of all files, where there are any
    */
   static StudyFiles read(Path file, ReadProgress progress) {
+    return read(file, progress, false);
+  }
+
+  /**
+   * Reads a study.
+   *
+   * @param file the study's file
+   * @param progress is told how far the reading of a long file has come
+   * @param planned whether its tests are only planned, so that readings may be missing
+   * @return the study with its files
+   * @throws Refusal with the problems of all files, where there are any
+   */
+  static StudyFiles read(Path file, ReadProgress progress, boolean planned) {
     Findings findings = new Findings();
     String name = String.valueOf(file.getFileName());
     Outcome<Study> read = JsonFile.read(file, name).then(StudyReader::read);
     findings.addAll(read.findings());
     Study study = read.value().orElseThrow(() -> new Refusal(findings.list()));
-    refuseUnsupported(study, findings);
     Path folder = Optional.ofNullable(file.toAbsolutePath().getParent()).orElse(Path.of("."));
     List<InputFile> inputs = new ArrayList<>();
     inputs.add(new InputFile(name, WorkbookLog.sha256(file)));
     Optional<FrameModel> model = model(study, folder, inputs, findings);
     List<Tested> tested = new ArrayList<>();
     for (Configuration configuration : study.configurations()) {
-      tested(configuration, model, folder, progress, inputs, findings).ifPresent(tested::add);
+      LogContext context = new LogContext(study.reduction(), study.limits(), planned, progress);
+      tested(configuration, model, folder, context, inputs, findings).ifPresent(tested::add);
     }
     Optional<MeasuredModes> modes = modes(study, tested, folder, inputs, findings);
+    List<OutsideTable> tables = tables(study, file, name, inputs, findings);
     findings.refuseIfErrors();
     return new StudyFiles(
         study,
-        model.orElseThrow(() -> new Refusal(findings.list())),
+        model,
+        tables,
         tested,
         modes,
         inputs,
@@ -124,32 +167,6 @@ record StudyFiles(
     return read.value();
   }
 
-  private static void refuseUnsupported(Study study, Findings findings) {
-    study.reduction().ifPresent(json -> later(json, "reduction", findings));
-    study.limits().ifPresent(json -> later(json, "limits", findings));
-    if (study.model().isEmpty()) {
-      findings.add(
-          StudyFinding.NOT_SUPPORTED_YET,
-          study.where(),
-          "a study without the key 'model' is not supported yet");
-    }
-    study
-        .outsideFlexibility()
-        .ifPresent(table -> tableLater(table.where(), "outsideFlexibility", findings));
-  }
-
-  private static void tableLater(Where where, String key, Findings findings) {
-    findings.add(
-        StudyFinding.NOT_SUPPORTED_YET, where, "the key '" + key + "' is not supported yet");
-  }
-
-  private static void later(Json json, String key, Findings findings) {
-    findings.add(
-        StudyFinding.NOT_SUPPORTED_YET,
-        json.where(),
-        "the key '" + key + "' is not supported yet; use the sheet of the log instead");
-  }
-
   private static Optional<FrameModel> model(
       Study study, Path folder, List<InputFile> inputs, Findings findings) {
     if (study.model().isEmpty()) {
@@ -165,11 +182,32 @@ record StudyFiles(
     return read.value();
   }
 
+  private static List<OutsideTable> tables(
+      Study study, Path file, String name, List<InputFile> inputs, Findings findings) {
+    InputFolder folder = InputFolder.of(file, name);
+    List<String> parameters = study.parameters().stream().map(Parameter::name).toList();
+    List<OutsideTable> tables = new ArrayList<>();
+    for (Study.OutsideTable stated : study.outsideFlexibility()) {
+      Optional<Path> path = folder.resolve(stated.file(), stated.where(), findings);
+      if (path.isEmpty()) {
+        continue;
+      }
+      Outcome<OutsideFlexibility> read =
+          OutsideTableReader.read(path.get(), folder.shown(stated.file()), parameters);
+      findings.addAll(read.findings());
+      read.value().ifPresent(found -> tables.add(new OutsideTable(found, stated.at())));
+      if (Files.isReadable(path.get())) {
+        inputs.add(new InputFile(stated.file(), WorkbookLog.sha256(path.get())));
+      }
+    }
+    return tables;
+  }
+
   private static Optional<Tested> tested(
       Configuration configuration,
       Optional<FrameModel> model,
       Path folder,
-      ReadProgress progress,
+      LogContext context,
       List<InputFile> inputs,
       Findings findings) {
     if (configuration.log().isEmpty()) {
@@ -180,8 +218,10 @@ record StudyFiles(
       return Optional.empty();
     }
     String name = configuration.log().get();
-    Outcome<TestLog> read = LogFile.read(folder.resolve(name), name, progress);
-    findings.addAll(read.findings());
+    Outcome<TestLog> read = LogFile.read(folder.resolve(name), name, context);
+    read.findings().stream()
+        .filter(finding -> !findings.list().contains(finding))
+        .forEach(finding -> findings.addAll(List.of(finding)));
     read.value().ifPresent(log -> inputs.addAll(log.inputs()));
     Optional<FrameModel> changed = model;
     if (model.isPresent() && configuration.changes().isPresent()) {
@@ -190,12 +230,21 @@ record StudyFiles(
       findings.addAll(applied.findings());
       changed = applied.value();
     }
-    if (read.value().isEmpty() || changed.isEmpty()) {
+    if (model.isEmpty() && configuration.changes().isPresent()) {
+      findings.add(
+          StudyFinding.KEYS_DISAGREE,
+          configuration.where(),
+          "the configuration '"
+              + configuration.name()
+              + "' changes a model that is held elsewhere; put its coefficients into the table's"
+              + " column Configuration");
+    }
+    if (read.value().isEmpty() || (model.isPresent() && changed.isEmpty())) {
       return Optional.empty();
     }
     TestLog log = read.value().get();
     // The cross-check of gauges and loads against the model runs on what could be made out.
-    if (findings.hasErrors()) {
+    if (findings.hasErrors() && changed.isPresent()) {
       findings.addAll(
           FrameFlexibility.prepare(changed.get(), log.gauges(), log.loads(), List.of())
               .findings());
@@ -205,7 +254,7 @@ record StudyFiles(
             configuration.name(),
             name,
             log,
-            changed.get(),
+            changed,
             configuration.changes().map(StudyFiles::words).orElse(List.of())));
   }
 

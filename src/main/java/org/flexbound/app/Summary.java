@@ -8,7 +8,9 @@ import org.flexbound.report.Rounded;
 import org.flexbound.report.UnitSystem;
 import org.flexbound.report.results.Coefficient;
 import org.flexbound.report.results.Comparison;
+import org.flexbound.report.results.ConfigurationFit;
 import org.flexbound.report.results.Finding;
+import org.flexbound.report.results.Group;
 import org.flexbound.report.results.Parameter;
 import org.flexbound.report.results.Reciprocity;
 import org.flexbound.report.results.Results;
@@ -38,6 +40,11 @@ final class Summary {
 
   void print() {
     out.println(terminal.bold(PlainText.of(results.title())));
+    if (results.plan().isPresent()) {
+      new PlanSummary(terminal, results, results.plan().get(), units).print();
+      findings();
+      return;
+    }
     runs();
     coefficients();
     reciprocity();
@@ -186,11 +193,11 @@ final class Summary {
       boolean factor = p.unit().equals("1");
       table.row(
           p.name(),
-          stiffness(p, p.nominal()),
-          stiffness(p, p.updated()),
+          Stiffnesses.text(p, p.nominal(), units),
+          Stiffnesses.text(p, p.updated(), units),
           factor ? "× nominal" : units.symbol(p.unit()),
           optional(p.factor(), 3, "–"),
-          interval(p),
+          Stiffnesses.interval(p, units),
           p.status() + (p.onBound() ? ", on its bound" : ""));
     }
     table.print(out);
@@ -208,27 +215,45 @@ final class Summary {
         update.verdict().startsWith("misfits") || update.verdict().startsWith("not")
             ? terminal.bad(words)
             : update.shown().agrees() ? terminal.good(words) : terminal.warn(words));
+    for (Group group : update.groups()) {
+      out.println("  only together: " + PlainText.of(group.inWords()));
+    }
+    if (update.configurations().size() > 1) {
+      for (ConfigurationFit fit : update.configurations()) {
+        String how =
+            "  configuration "
+                + PlainText.of(fit.configuration())
+                + (fit.agrees() ? " agrees" : " disagrees")
+                + misfit(fit.misfit(), fit.limit());
+        out.println(fit.agrees() ? how : terminal.bad(how));
+      }
+    }
+    if (update.starts().size() > 1) {
+      String how = "  " + update.starts().size() + " starts ";
+      out.println(
+          update.startsAgree() ? how + "agree" : terminal.warn(how + "came to different points"));
+    }
+    update
+        .validation()
+        .ifPresent(
+            v ->
+                out.println(
+                    v.passed()
+                        ? terminal.good(
+                            "  validated: held-out load cases are predicted within their uncertainty"
+                                + misfit(v.statistic(), v.limit().orElse(0)))
+                        : terminal.bad(
+                            "  not validated: held-out load cases are predicted worse than their"
+                                + " uncertainty allows"
+                                + misfit(v.statistic(), v.limit().orElse(0)))));
   }
 
-  private String stiffness(Parameter p, OptionalDouble value) {
-    if (value.isEmpty()) {
-      return "rigid";
-    }
-    double shown =
-        p.unit().equals("1") ? value.getAsDouble() : units.shown(value.getAsDouble(), p.unit());
-    return Rounded.significant(shown, 3);
-  }
-
-  private String interval(Parameter p) {
-    if (p.lower95().isEmpty() && p.upper95().isEmpty()) {
-      return "open";
-    }
-    if (p.upper95().isEmpty()) {
-      return "above " + stiffness(p, p.lower95());
-    }
-    return p.lower95().isEmpty()
-        ? "below " + stiffness(p, p.upper95())
-        : stiffness(p, p.lower95()) + " to " + stiffness(p, p.upper95());
+  private static String misfit(double value, double limit) {
+    return " (misfit "
+        + Rounded.significant(value, 3)
+        + ", limit "
+        + Rounded.significant(limit, 3)
+        + ")";
   }
 
   private void findings() {

@@ -4,6 +4,7 @@ import java.nio.file.Path;
 import java.util.concurrent.Callable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
 
 @Command(
@@ -18,6 +19,13 @@ final class UpdateCommand implements Callable<Integer> {
   @SuppressWarnings("NullAway.Init") // picocli sets it before call() is called
   private Path file;
 
+  @Option(
+      names = "--before-test",
+      description =
+          "Say what each parameter would get from the planned gauges, loads and stated "
+              + "uncertainties, before any reading exists: the log needs no readings.")
+  private boolean beforeTest;
+
   @Mixin private OutputOptions output = new OutputOptions();
 
   UpdateCommand(Terminal terminal) {
@@ -26,6 +34,7 @@ final class UpdateCommand implements Callable<Integer> {
 
   @Override
   public Integer call() {
-    return new Work(terminal, output).update(file).number();
+    Work work = new Work(terminal, output);
+    return (beforeTest ? work.beforeTest(file) : work.update(file)).number();
   }
 }

@@ -5,7 +5,9 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import org.flexbound.compare.Comparison;
+import org.flexbound.compare.ConfiguredFrame;
 import org.flexbound.compare.FlexibilityComparator;
+import org.flexbound.compare.OutsideModel;
 import org.flexbound.document.OutputFolder;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
@@ -14,16 +16,21 @@ import org.flexbound.flexibility.MeasuredFlexibility;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.FrameWriter;
 import org.flexbound.reduce.Places;
+import org.flexbound.reduce.PlannedFlexibility;
 import org.flexbound.reduce.Reducer;
 import org.flexbound.reduce.Reduction;
 import org.flexbound.reduce.ReductionProblem;
+import org.flexbound.reduce.TestPlanner;
 import org.flexbound.report.ReportFiles;
 import org.flexbound.report.gather.Gathering;
 import org.flexbound.report.results.Results;
 import org.flexbound.study.Study;
 import org.flexbound.testlog.TestLog;
 import org.flexbound.testlog.LogFile;
+import org.flexbound.study.Parameter;
+import org.flexbound.update.OutsideUpdate;
 import org.flexbound.update.StudyUpdate;
+import org.flexbound.update.UpdateSettings;
 import org.flexbound.update.UpdateResult;
 
 /** The steps of the commands that read a test. */
@@ -83,7 +90,10 @@ final class Work {
     StudyFiles files = terminal.withProgress(progress -> StudyFiles.read(file, progress));
     Prepared prepared = prepare("update", files);
     Outcome<UpdateResult> updated =
-        StudyUpdate.run(files.study(), files.model(), prepared.measured());
+        files.tables().isEmpty()
+            ? StudyUpdate.run(files.study(), files.model(), prepared.measured())
+            : OutsideUpdate.run(
+                files.study(), files.tables(), prepared.measured(), UpdateSettings.FULL);
     prepared.gathering().findings(updated.findings());
     if (updated.hasErrors() || updated.value().isEmpty()) {
       throw new Refusal(updated.findings());
@@ -91,9 +101,64 @@ final class Work {
     UpdateResult result = updated.value().get();
     prepared.gathering().update(result);
     OutputFolder folder = new OutputFolder(output.folder);
-    FrameModel model = StudyUpdate.updatedModel(files.model(), result);
-    folder.add("updated-model.json", FrameWriter.write(model).getBytes(StandardCharsets.UTF_8));
+    if (files.tables().isEmpty()) {
+      FrameModel model = StudyUpdate.updatedModel(files.model(), result);
+      folder.add("updated-model.json", FrameWriter.write(model).getBytes(StandardCharsets.UTF_8));
+    }
     return finish(prepared.gathering().results(), folder, result.undecided());
+  }
+
+  /** Says which status each parameter would get, before any reading exists. */
+  ExitCode beforeTest(Path file) {
+    StudyFiles files =
+        terminal.withProgress(progress -> StudyFiles.read(file, progress, true));
+    Findings findings = new Findings();
+    findings.addAll(files.findings());
+    Gathering gathering = new Gathering("update --before-test");
+    gathering.title(files.study().title());
+    files.inputs().forEach(gathering::input);
+    files.frame().ifPresent(model -> gathering.model(model, files.study().model().orElse("")));
+    List<MeasuredFlexibility> expected = new ArrayList<>();
+    for (StudyFiles.Tested tested : files.tested()) {
+      TestLog log = tested.log();
+      Outcome<PlannedFlexibility> planned =
+          computed(files, tested)
+              .then(
+                  computed ->
+                      TestPlanner.plan(
+                          new ReductionProblem(tested.configuration(), log, tested.places()),
+                          computed));
+      findings.addAll(planned.findings());
+      planned
+          .value()
+          .ifPresent(
+              plan -> {
+                expected.add(plan.flexibility());
+                gathering.planned(log, tested.file(), plan, tested.changes());
+              });
+    }
+    findings.refuseIfErrors();
+    Outcome<UpdateResult> forecast =
+        files.tables().isEmpty()
+            ? StudyUpdate.beforeTest(files.study(), files.model(), expected)
+            : OutsideUpdate.run(
+                files.study(), files.tables(), expected, UpdateSettings.ESTIMATES);
+    findings.addAll(forecast.findings());
+    findings.refuseIfErrors();
+    gathering.findings(findings.list());
+    UpdateResult result = forecast.value().orElseThrow(() -> new Refusal(findings.list()));
+    gathering.update(result);
+    return finish(
+        gathering.results(), new OutputFolder(output.folder), !result.convergence().converged());
+  }
+
+  /** The computed coefficients of a planned test, gauges × loads. */
+  private static Outcome<double[][]> computed(StudyFiles files, StudyFiles.Tested tested) {
+    TestLog log = tested.log();
+    return files.tables().isEmpty()
+        ? ConfiguredFrame.nominal(tested.model(), log.gauges(), log.loads())
+        : OutsideModel.matrix(
+            files.tables().get(0), tested.configuration(), log.gauges(), log.loads());
   }
 
   /** What both commands on a study come to before they part. */
@@ -105,13 +170,13 @@ final class Work {
     Gathering gathering = new Gathering(command);
     gathering.title(files.study().title());
     files.inputs().forEach(gathering::input);
-    files.study().model().ifPresent(name -> gathering.model(files.model(), name));
+    files.frame().ifPresent(model -> gathering.model(model, files.study().model().orElse("")));
     List<MeasuredFlexibility> measured = new ArrayList<>();
     for (StudyFiles.Tested tested : files.tested()) {
       Outcome<Reduction> reduced =
           Reducer.reduce(
               new ReductionProblem(
-                  tested.configuration(), tested.log(), new ModelPlaces(tested.model())));
+                  tested.configuration(), tested.log(), tested.places()));
       findings.addAll(reduced.findings());
       reduced
           .value()
@@ -124,8 +189,13 @@ final class Work {
     }
     findings.refuseIfErrors();
     Outcome<Comparison> compared =
-        FlexibilityComparator.compare(
-            files.study(), files.model(), measured, files.modes());
+        files.tables().isEmpty()
+            ? FlexibilityComparator.compare(
+                files.study(), files.model(), measured, files.modes())
+            : FlexibilityComparator.compareOutside(
+                files.tables().get(0),
+                files.study().parameters().stream().map(Parameter::name).toList(),
+                measured);
     findings.addAll(compared.findings());
     findings.refuseIfErrors();
     compared.value().ifPresent(gathering::comparison);

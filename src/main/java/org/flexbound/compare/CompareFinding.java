@@ -35,6 +35,12 @@ public enum CompareFinding implements FindingKind {
       Severity.NOTE,
       "The computed flexibility is that of the lowest modes only, which leave a part of it out.",
       "Compare with the full flexibility, unless the model is known by its modes only."),
+  /** A measured coefficient that a table from outside lacks. */
+  NOT_IN_TABLE(
+      "COMPARE-NOT-IN-TABLE",
+      Severity.ERROR,
+      "A table computed elsewhere lacks a coefficient that was measured.",
+      "Add its row, with the sensitivities to all parameters."),
   /** A sign that disagrees, far outside of the uncertainty. */
   OPPOSITE_SIGN(
       "COMPARE-OPPOSITE-SIGN",

@@ -111,16 +111,14 @@ public final class ConfiguredFrame {
   /**
    * The nominal flexibility of a configuration for some gauges and loads, without any measurement.
    *
-   * @param configuration the configuration
-   * @param model the study's frame model
+   * @param frame the frame model with the configuration's changes
    * @param gauges the gauges
    * @param loads the loads
    * @return gauges × loads, SI, with all findings; no value where anything is in error
    */
   public static Outcome<double[][]> nominal(
-      Configuration configuration, FrameModel model, List<Gauge> gauges, List<Load> loads) {
-    return changed(configuration, model)
-        .then(frame -> FrameFlexibility.prepare(frame, gauges, loads, List.of()))
+      FrameModel frame, List<Gauge> gauges, List<Load> loads) {
+    return FrameFlexibility.prepare(frame, gauges, loads, List.of())
         .then(ready -> Outcome.of(ready.solve(List.of()).values(), List.of()));
   }
 

@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.Consumer;
 import org.apache.commons.statistics.distribution.ChiSquaredDistribution;
 import org.apache.commons.statistics.distribution.FDistribution;
 import org.flexbound.finding.Findings;
@@ -81,18 +82,76 @@ public final class FlexibilityComparator {
     Findings findings = new Findings();
     List<ConfigurationComparison> result = new ArrayList<>();
     for (ConfiguredFrame frame : frames) {
-      result.add(compare(frame, frame.nominal(), modes, findings));
+      ComputedFlexibility solution = frame.nominal();
+      result.add(
+          compare(
+              frame.measured(),
+              frame.absolute(solution.values()),
+              PlacingEffects.of(frame, solution),
+              parts(frame.measured(), solution),
+              table -> new ComparisonHints(frame, solution, table, findings).tell(),
+              frame.truncated().map(truncated -> new TruncationEffect(frame, truncated)),
+              modes,
+              findings));
     }
     return new Comparison(result, findings.list());
   }
 
+  /**
+   * Compares a model held elsewhere, at its nominal stiffnesses.
+   *
+   * @param table its flexibility and sensitivities, computed at the nominal stiffnesses or carried
+   *     there from where they were
+   * @param parameters the parameters' names; what they contribute is what their sensitivities say
+   * @param measured what was measured, by configuration
+   * @return the comparison, with all findings; no value where the table lacks a coefficient
+   */
+  public static Outcome<Comparison> compareOutside(
+      OutsideTable table, List<String> parameters, List<MeasuredFlexibility> measured) {
+    Findings findings = new Findings();
+    List<ConfigurationComparison> result = new ArrayList<>();
+    for (MeasuredFlexibility m : measured) {
+      Optional<OutsideModel> model =
+          OutsideModel.of(table, List.of(m), parameters, findings);
+      if (model.isEmpty()) {
+        continue;
+      }
+      double[] nominal = new double[parameters.size()];
+      double[][] derivatives = model.get().derivatives(nominal);
+      Map<String, double[]> parts = new LinkedHashMap<>();
+      for (int k = 0; k < nominal.length; k++) {
+        double[] part = new double[derivatives.length];
+        for (int i = 0; i < part.length; i++) {
+          part[i] = -derivatives[i][k];
+        }
+        parts.put(parameters.get(k), m.map().apply(part));
+      }
+      // without a model there are no other nodes or directions to guess at
+      result.add(
+          compare(
+              m,
+              model.get().coefficients(nominal),
+              List.of(),
+              parts,
+              unused -> {},
+              Optional.empty(),
+              Optional.empty(),
+              findings));
+    }
+    return findings.hasErrors()
+        ? Outcome.none(findings.list())
+        : Outcome.of(new Comparison(result, findings.list()), findings.list());
+  }
+
   private static ConfigurationComparison compare(
-      ConfiguredFrame frame,
-      ComputedFlexibility solution,
+      MeasuredFlexibility measured,
+      double[] absolute,
+      List<double[]> placing,
+      Map<String, double[]> parts,
+      Consumer<HintTable> hints,
+      Optional<TruncationEffect> effect,
       Optional<MeasuredModes> modes,
       Findings findings) {
-    MeasuredFlexibility measured = frame.measured();
-    double[] absolute = frame.absolute(solution.values());
     double[] computed = measured.map().apply(absolute);
     double[] values = measured.values();
     double[] differences = new double[values.length];
@@ -100,10 +159,7 @@ public final class FlexibilityComparator {
       differences[r] = values[r] - computed[r];
     }
     double[][] covariance =
-        DifferenceCovariance.of(measured, absolute, PlacingEffects.of(frame, solution));
-    Map<String, double[]> parts = parts(measured, solution);
-    Optional<TruncationEffect> effect =
-        frame.truncated().map(truncated -> new TruncationEffect(frame, truncated));
+        DifferenceCovariance.of(measured, absolute, placing);
     List<CoefficientComparison.Truncated> truncated =
         effect.map(TruncationEffect::coefficients).orElse(List.of());
     Optional<OptionalDouble[]> fromModes =
@@ -148,9 +204,7 @@ public final class FlexibilityComparator {
     for (int r = 0; r < values.length; r++) {
       uncertainty[r] = Math.sqrt(covariance[r][r]);
     }
-    new ComparisonHints(
-            frame, solution, new HintTable(measured, values, computed, uncertainty), findings)
-        .tell();
+    hints.accept(new HintTable(measured, values, computed, uncertainty));
     WeightedSquares squares = new WeightedSquares(covariance);
     double misfit = squares.product(differences, differences);
     effect.ifPresent(told -> told.tell(misfit, squares, uncertainty, findings));

@@ -133,6 +133,20 @@ public enum ReduceFinding implements FindingKind {
       Severity.WARNING,
       "A load or a gauge was described but no run measured it.",
       "Add the run, or remove the row."),
+  /** A plan that lacks what the forecast needs. */
+  PLAN_INCOMPLETE(
+      "RED-PLAN-INCOMPLETE",
+      Severity.ERROR,
+      "A planned load has no size.",
+      "State its Limit on the sheet Load points, or write the planned load steps on a readings"
+          + " sheet."),
+  /** A plan for which something was assumed. */
+  PLAN_ASSUMED(
+      "RED-PLAN-ASSUMED",
+      Severity.WARNING,
+      "Something that a forecast needs is not stated and was assumed.",
+      "State the repeatability on the sheet Options (or under 'reduction' in the study), and the"
+          + " runs on the sheet Runs."),
   /** No slope at all. */
   NOTHING_MEASURED(
       "RED-NOTHING-MEASURED",

@@ -1,6 +1,9 @@
 package org.flexbound.study;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import org.flexbound.document.Json;
 import org.flexbound.finding.Where;
@@ -19,8 +22,8 @@ import org.flexbound.finding.Where;
  * @param reduction the entries of the sheet Options that the study overrides
  * @param limits the entries of the sheet Limits that the study overrides
  * @param measuredModes the table of measured modes
- * @param outsideFlexibility the table of flexibility coefficients and sensitivities that takes the
- *     place of the frame solver
+ * @param outsideFlexibility tables of flexibility coefficients and sensitivities that take the
+ *     place of the frame solver, in the order in which they were computed; none where it is used
  * @param starts how many starting points the solver is sent from, at least 1
  * @param where the study file
  */
@@ -35,7 +38,7 @@ public record Study(
     Optional<Json> reduction,
     Optional<Json> limits,
     Optional<Table> measuredModes,
-    Optional<Table> outsideFlexibility,
+    List<OutsideTable> outsideFlexibility,
     int starts,
     Where where) {
   /** The name of the only configuration of a study that does not name any. */
@@ -46,8 +49,24 @@ public record Study(
     configurations = List.copyOf(configurations);
     parameters = List.copyOf(parameters);
     heldOut = List.copyOf(heldOut);
+    outsideFlexibility = List.copyOf(outsideFlexibility);
     if (configurations.isEmpty() || starts < 1) {
       throw new IllegalArgumentException("a study has a configuration and a start");
+    }
+  }
+
+  /**
+   * A table computed elsewhere.
+   *
+   * @param file its name, as the study has it
+   * @param at the factors on the nominal stiffnesses at which it was computed, by parameter; one that
+   *     is not named was nominal
+   * @param where where the study names it
+   */
+  public record OutsideTable(String file, Map<String, Double> at, Where where) {
+    /** Copies the map and keeps its order. */
+    public OutsideTable {
+      at = Collections.unmodifiableMap(new LinkedHashMap<>(at));
     }
   }
 

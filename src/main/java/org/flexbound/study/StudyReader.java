@@ -58,9 +58,12 @@ public final class StudyReader {
     Json.Members study = top.get();
     entries.refuseOtherKeys(study, KEYS);
     Optional<String> model = entries.text(study, "model");
-    Optional<Study.Table> outside = table(entries, study, "outsideFlexibility");
+    OutsideTables tables = new OutsideTables(entries, findings);
+    List<Study.OutsideTable> outside = tables.read(study);
     Optional<Study.Table> modes = table(entries, study, "measuredModes");
-    if (model.isEmpty() && outside.isEmpty() && study.get("model").isEmpty()) {
+    if (model.isEmpty()
+        && study.get("outsideFlexibility").isEmpty()
+        && study.get("model").isEmpty()) {
       findings.add(
           StudyFinding.MISSING_KEY,
           study.where(),
@@ -68,13 +71,15 @@ public final class StudyReader {
               + " 'outsideFlexibility' with a table)");
     }
     List<Configuration> configurations = configurations(entries, study);
+    List<Parameter> parameters = parameters(entries, study);
+    tables.refuseUnknown(outside, parameters);
     Study result =
         new Study(
             entries.text(study, "title").orElse(""),
             model,
             configurations,
             flexibility(entries, study),
-            parameters(entries, study),
+            parameters,
             rule(study),
             heldOut(entries, study),
             study.get("reduction"),

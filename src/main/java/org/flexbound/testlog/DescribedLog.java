@@ -22,13 +22,13 @@ final class DescribedLog {
 
   private DescribedLog() {}
 
-  static Outcome<TestLog> read(Path path, String shownName, ReadProgress progress) {
+  static Outcome<TestLog> read(Path path, String shownName, LogContext context) {
     return JsonFile.read(path, shownName)
-        .then(json -> new DescribedLog().log(json, path, shownName, progress));
+        .then(json -> new DescribedLog().log(json, path, shownName, context));
   }
 
   private Outcome<TestLog> log(
-      Json json, Path path, String shownName, ReadProgress progress) {
+      Json json, Path path, String shownName, LogContext context) {
     JsonKeys keys = new JsonKeys(findings);
     Optional<Json.Members> top = keys.members(json, "a description of a log");
     if (top.isEmpty()) {
@@ -37,11 +37,15 @@ final class DescribedLog {
     keys.refuseOthers(top.get(), DescriptionKeys.top());
     inputs.add(new InputFile(shownName, WorkbookLog.sha256(path)));
     DescribedFiles files =
-        new DescribedFiles(InputFolder.of(path, shownName), keys, findings);
+        new DescribedFiles(
+            InputFolder.of(path, shownName),
+            keys,
+            // the files of a planned test need not be there yet
+            context.planned() ? new Findings() : findings);
     List<ReadingsSource> sources = files.sources(top.get());
     LogReader reader =
         new LogReader(
-            new DescribedTables(top.get(), files, findings), sources, progress, findings);
+            new DescribedTables(top.get(), files, findings), sources, context, findings);
     TestLog log = reader.log(() -> inputs(files));
     return Outcome.of(log, findings.list());
   }

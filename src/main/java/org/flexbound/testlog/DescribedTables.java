@@ -18,10 +18,19 @@ import org.flexbound.finding.Where;
 final class DescribedTables implements LogTables {
   private final Json.Members top;
   private final JsonKeys keys;
-  private final DescribedFiles files;
+  private final Optional<DescribedFiles> files;
   private final Findings findings;
 
   DescribedTables(Json.Members top, DescribedFiles files, Findings findings) {
+    this(top, Optional.of(files), findings);
+  }
+
+  /** Tables that name no file. */
+  DescribedTables(Json.Members top, Findings findings) {
+    this(top, Optional.empty(), findings);
+  }
+
+  private DescribedTables(Json.Members top, Optional<DescribedFiles> files, Findings findings) {
     this.top = top;
     this.files = files;
     this.findings = findings;
@@ -60,7 +69,7 @@ final class DescribedTables implements LogTables {
               if (layout.equals(SheetLayout.COEFFICIENTS)
                   && value instanceof Json.Members elsewhere) {
                 return files
-                    .table(elsewhere)
+                    .flatMap(found -> found.table(elsewhere))
                     .flatMap(
                         sheet ->
                             EntryTable.read(

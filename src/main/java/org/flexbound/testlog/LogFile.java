@@ -24,7 +24,7 @@ public final class LogFile {
    * @return the log as far as it could be made out, with everything found
    */
   public static Outcome<TestLog> read(Path path, String shownName) {
-    return read(path, shownName, ReadProgress.NONE);
+    return read(path, shownName, LogContext.NONE);
   }
 
   /**
@@ -36,9 +36,21 @@ public final class LogFile {
    * @return the log as far as it could be made out, with everything found
    */
   public static Outcome<TestLog> read(Path path, String shownName, ReadProgress progress) {
+    return read(path, shownName, LogContext.NONE.with(progress));
+  }
+
+  /**
+   * Reads a log of which more is known.
+   *
+   * @param path where it lies
+   * @param shownName its name in messages and results
+   * @param context what is stated elsewhere
+   * @return the log as far as it could be made out, with everything found
+   */
+  public static Outcome<TestLog> read(Path path, String shownName, LogContext context) {
     String name = shownName.toLowerCase(Locale.ROOT);
     if (name.endsWith(".json")) {
-      return DescribedLog.read(path, shownName, progress);
+      return DescribedLog.read(path, shownName, context);
     }
     if (name.endsWith(".csv") || name.endsWith(".txt") || name.endsWith(".asc")) {
       return Outcome.none(
@@ -50,6 +62,6 @@ public final class LogFile {
                       + " names this file and says what its columns mean, as log-description.json"
                       + " of the templates does")));
     }
-    return WorkbookLog.read(path, shownName, progress);
+    return WorkbookLog.read(path, shownName, context);
   }
 }

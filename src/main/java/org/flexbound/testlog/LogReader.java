@@ -28,7 +28,7 @@ import org.flexbound.setup.StatedCoefficient;
 final class LogReader {
   private final LogTables tables;
   private final List<ReadingsSource> sources;
-  private final ReadProgress progress;
+  private final LogContext context;
   private final Findings findings;
   private final EntrySheets sheets;
   private final EntryCells cells;
@@ -36,21 +36,18 @@ final class LogReader {
   /**
    * A reader.
    *
-   * @param tables where the entries stand
+   * @param log where the entries stand
    * @param sources the sheets that may hold readings
-   * @param progress is told how far the reading of a long file has come
+   * @param context what is known outside of the log
    * @param findings gets everything found
    */
   LogReader(
-      LogTables tables,
-      List<ReadingsSource> sources,
-      ReadProgress progress,
-      Findings findings) {
-    this.progress = progress;
-    this.tables = tables;
+      LogTables log, List<ReadingsSource> sources, LogContext context, Findings findings) {
+    this.context = context;
+    this.tables = new OverriddenTables(log, context, findings);
     this.sources = List.copyOf(sources);
     this.findings = findings;
-    this.sheets = new EntrySheets(tables, findings);
+    this.sheets = new EntrySheets(this.tables, findings);
     this.cells = new EntryCells(findings);
   }
 
@@ -115,7 +112,7 @@ final class LogReader {
                         + NearestWord.question(gauge, gaugeNames));
               }
             });
-    List<Run> runs = stated ? List.of() : runs(claims, options);
+    List<Run> runs = runs(claims, options, stated);
     List<StatedCoefficient> given =
         coefficients
             .map(
@@ -155,6 +152,18 @@ final class LogReader {
           sheet,
           "the decision rule belongs to acceptance limits, which are not supported yet");
     }
+  }
+
+  private List<Run> runs(List<Claim> claims, ReductionOptions options, boolean stated) {
+    if (stated) {
+      return List.of();
+    }
+    return context.planned() ? plannedRuns(claims, options) : runs(claims, options);
+  }
+
+  /** The runs as far as they stand there already; what is missing or wrong with them is no matter. */
+  private List<Run> plannedRuns(List<Claim> claims, ReductionOptions options) {
+    return new LogReader(tables, sources, LogContext.NONE.with(context.progress()), new Findings()).runs(claims, options);
   }
 
   private void checkNames(List<Claim> claims, List<Instrument> instruments) {
@@ -198,7 +207,7 @@ final class LogReader {
             .table(tables.runs())
             .map(found -> RunRows.read(found, !tables.runs().equals(SheetLayout.RUNS), cells, findings))
             .orElse(List.of());
-    RunBuilder builder = new RunBuilder(claims, options.localGravity(), progress, findings);
+    RunBuilder builder = new RunBuilder(claims, options.localGravity(), context.progress(), findings);
     HeaderSearch search =
         new HeaderSearch(
             columns(claims, described, true), columns(claims, described, false), findings);

@@ -122,6 +122,12 @@ public enum TestlogFinding implements FindingKind {
       Severity.ERROR,
       "Two loads or gauges claim one column in one run.",
       "Say on the sheet Runs which of them the column reads in that run."),
+  /** An entry that is stated elsewhere takes the place of the log's. */
+  OVERRIDDEN(
+      "LOG-OVERRIDDEN",
+      Severity.NOTE,
+      "What the study states takes the place of what the log states.",
+      "Nothing to do, if that is meant; else take it out of the study."),
   /** No readings at all. */
   NO_READINGS(
       "LOG-NO-READINGS",

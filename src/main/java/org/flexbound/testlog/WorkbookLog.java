@@ -23,16 +23,16 @@ public final class WorkbookLog {
    * @return the log as far as it could be made out, with everything found
    */
   public static Outcome<TestLog> read(Path path, String shownName) {
-    return read(path, shownName, ReadProgress.NONE);
+    return read(path, shownName, LogContext.NONE);
   }
 
-  static Outcome<TestLog> read(Path path, String shownName, ReadProgress progress) {
+  static Outcome<TestLog> read(Path path, String shownName, LogContext context) {
     return WorkbookFile.open(path, shownName)
-        .then(file -> log(file, shownName, Checksum.begin(path), progress));
+        .then(file -> log(file, shownName, Checksum.begin(path), context));
   }
 
   private static Outcome<TestLog> log(
-      SheetFile file, String shownName, Checksum sum, ReadProgress progress) {
+      SheetFile file, String shownName, Checksum sum, LogContext context) {
     Findings findings = new Findings();
     List<ReadingsSource> sources = new ArrayList<>();
     for (Sheet sheet : file.sheets()) {
@@ -46,7 +46,7 @@ public final class WorkbookLog {
       }
     }
     TestLog log =
-        new LogReader(new WorkbookTables(file, findings), sources, progress, findings)
+        new LogReader(new WorkbookTables(file, findings), sources, context, findings)
             .log(() -> List.of(new InputFile(shownName, sum.digits())));
     return Outcome.of(log, findings.list());
   }

@@ -21,6 +21,12 @@ record Interval(double low, double high) {
    * @param scatterFactor what Student's t makes of the scatter's variances
    */
   static Interval of(ProfileTracer.Traced traced, double scatterFactor) {
+    return new Interval(
+        quantile(traced, scatterFactor, 0.025), quantile(traced, scatterFactor, 0.975));
+  }
+
+  /** One quantile of that density. */
+  static double quantile(ProfileTracer.Traced traced, double scatterFactor, double probability) {
     TreeMap<Double, Double> logDensity = new TreeMap<>();
     double highest = Double.NEGATIVE_INFINITY;
     for (Map.Entry<Double, Double> point : traced.curve().entrySet()) {
@@ -39,8 +45,7 @@ record Interval(double low, double high) {
       double middle = from + (i + 0.5) * step;
       sums[i + 1] = sums[i] + Math.exp(between(logDensity, middle) - highest);
     }
-    return new Interval(
-        from + step * place(sums, 0.025), from + step * place(sums, 0.975));
+    return from + step * place(sums, probability);
   }
 
   private static double place(double[] sums, double share) {

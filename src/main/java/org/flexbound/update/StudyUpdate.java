@@ -114,96 +114,19 @@ public final class StudyUpdate {
   }
 
   /**
-   * Updates a model held elsewhere, by a table of its flexibility and sensitivities.
-   *
-   * @param study the study; every parameter is worked in its logarithm, with bounds as factors
-   * @param table the table, computed at the nominal parameters
-   * @param measured what was measured, by configuration
-   * @param settings how much of the evidence is worked out
-   * @return the result, parameters as factors; no value where anything is in error
-   */
-  public static Outcome<UpdateResult> runOutside(
-      Study study,
-      OutsideFlexibility table,
-      List<MeasuredFlexibility> measured,
-      UpdateSettings settings) {
-    Findings findings = new Findings();
-    List<WorkingParameter> parameters = new ArrayList<>();
-    for (Parameter parameter : study.parameters()) {
-      if (parameter.working() != Working.LN) {
-        findings.add(
-            StudyFinding.KEYS_DISAGREE,
-            parameter.where(),
-            "the parameter '"
-                + parameter.name()
-                + "' is of a model held elsewhere, which is worked in the logarithm only");
-      } else {
-        WorkingParameter.of(parameter, 1, "1", Double.NaN, findings).ifPresent(parameters::add);
-      }
-    }
-    refuseUnknownCases(study, measured, findings);
-    Optional<OutsideFunction> function =
-        OutsideFunction.of(table, measured, parameters, findings);
-    if (function.isEmpty() || findings.hasErrors()) {
-      return Outcome.none(findings.list());
-    }
-    findings.add(
-        UpdateFinding.LINEAR_STEP,
-        table.where(),
-        "the computed flexibility is that of a table, linear in each compliance about it");
-    UpdateResult result =
-        new UpdateSolver(settings)
-            .solve(
-                new UpdateProblem(
-                    parameters,
-                    measured,
-                    function.get(),
-                    study.rule(),
-                    study.heldOut(),
-                    study.starts()));
-    findings.addAll(result.findings());
-    return Outcome.of(result.with(findings.list()), findings.list());
-  }
-
-  /**
    * Says before any test what status each parameter would get, if the nominal model were true.
    *
    * @param study the study
    * @param model its frame model
-   * @param plans the planned tests, by configuration
+   * @param expected what the planned tests would measure of the nominal model, by configuration
    * @return the forecast: statuses, standard deviations and intervals about the nominal model
    */
   public static Outcome<UpdateResult> beforeTest(
-      Study study, FrameModel model, List<PlannedTest> plans) {
-    Findings findings = new Findings();
-    List<MeasuredFlexibility> expected = new ArrayList<>();
-    for (PlannedTest plan : plans) {
-      Optional<Configuration> configuration =
-          study.configurations().stream()
-              .filter(c -> c.name().equals(plan.configuration()))
-              .findFirst();
-      if (configuration.isEmpty()) {
-        continue;
-      }
-      Outcome<double[][]> computed =
-          ConfiguredFrame.nominal(configuration.get(), model, plan.gauges(), plan.loads());
-      findings.addAll(computed.findings());
-      computed.value().flatMap(c -> plan.expected(c, findings)).ifPresent(expected::add);
-      if (plan.gauges().stream().anyMatch(org.flexbound.setup.Gauge::base)) {
-        findings.add(
-            UpdateFinding.PLANNED_WITHOUT_BASE_MOTION,
-            configuration.get().where(),
-            "the base gauges of '" + plan.configuration() + "' are taken to see no motion");
-      }
-    }
-    if (findings.hasErrors() || expected.isEmpty()) {
-      return Outcome.none(findings.list());
-    }
-    return Outcome.of(expected, findings.list())
-        .then(measured -> run(study, model, measured, UpdateSettings.ESTIMATES));
+      Study study, FrameModel model, List<MeasuredFlexibility> expected) {
+    return run(study, model, expected, UpdateSettings.ESTIMATES);
   }
 
-  private static void refuseUnknownCases(
+  static void refuseUnknownCases(
       Study study, List<MeasuredFlexibility> measured, Findings findings) {
     for (HeldOutCase heldOut : study.heldOut()) {
       boolean known =

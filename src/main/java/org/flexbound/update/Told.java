@@ -7,6 +7,8 @@ import java.util.List;
 
 /** What the data tell of each parameter: profile, status, interval; all at μ = 1. */
 final class Told {
+  private static final double ONE_SIDED = 0.95;
+
   private final List<WorkingParameter> parameters;
   private final FittedModel model;
   private final Posterior posterior;
@@ -109,16 +111,35 @@ final class Told {
     ProfileTracer.Traced profile = profiles[k];
     Interval interval;
     if (profile.lowOpen() != profile.highOpen()) {
-      interval =
-          new Interval(
-              profile.lowOpen() ? low : finite(profile.oneSidedLow(), low),
-              profile.highOpen() ? high : finite(profile.oneSidedHigh(), high));
+      interval = oneSided(k, profile, low, high);
     } else if (profile.evaluated() && !profile.parabolic()) {
       interval = Interval.of(profile, scatterFactor);
     } else {
       interval = Interval.of(truncated, k);
     }
     return interval.widened(estimate.w[k], widening, low, high);
+  }
+
+  /**
+   * The more careful of two limits: where the profile says so, and the posterior's quantile. The
+   * profile alone keeps its level over all tests, but not over those in which a side came out open:
+   * that happens to a joint of moderate stiffness only where noise makes it look stiff, and its limit
+   * is too high just then. A posterior keeps its level whatever picked the case.
+   */
+  private Interval oneSided(int k, ProfileTracer.Traced profile, double low, double high) {
+    boolean curved = profile.evaluated() && !profile.parabolic();
+    if (profile.lowOpen()) {
+      double byPosterior =
+          curved
+              ? Interval.quantile(profile, scatterFactor, ONE_SIDED)
+              : truncated.quantile(k, ONE_SIDED);
+      return new Interval(low, Math.max(finite(profile.oneSidedHigh(), high), byPosterior));
+    }
+    double byPosterior =
+        curved
+            ? Interval.quantile(profile, scatterFactor, 1 - ONE_SIDED)
+            : truncated.quantile(k, 1 - ONE_SIDED);
+    return new Interval(Math.min(finite(profile.oneSidedLow(), low), byPosterior), high);
   }
 
   private static double finite(double value, double otherwise) {

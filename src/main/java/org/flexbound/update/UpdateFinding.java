@@ -53,30 +53,19 @@ public enum UpdateFinding implements FindingKind {
       Severity.NOTE,
       "The tests say next to nothing of a parameter.",
       "Its value is the prior's; load or measure where it deforms if it matters."),
-  /** A measured coefficient that a table from outside lacks. */
-  NOT_IN_TABLE(
-      "UPDATE-NOT-IN-TABLE",
-      Severity.ERROR,
-      "A table computed elsewhere lacks a coefficient that was measured.",
-      "Add its row, with the sensitivities to all parameters."),
   /** A table from outside is only the first step. */
   LINEAR_STEP(
       "UPDATE-LINEAR-STEP",
       Severity.NOTE,
       "The flexibility comes from a table and is carried on from it linearly in each compliance.",
-      "Compute a new table at the updated parameters and update again, until nothing moves."),
-  /** A plan that lacks what the forecast needs. */
-  PLAN_INCOMPLETE(
-      "UPDATE-PLAN-INCOMPLETE",
-      Severity.ERROR,
-      "A planned test lacks a repeatability or a load limit.",
-      "State it in the log."),
-  /** What a forecast leaves out. */
-  PLANNED_WITHOUT_BASE_MOTION(
-      "UPDATE-PLANNED-WITHOUT-BASE-MOTION",
+      "Compute a new table at the updated parameters and add it under 'outsideFlexibility' with"
+          + " its 'at', until the estimate stays where the last table was computed."),
+  /** How good a linear step was. */
+  STEP_FORETOLD(
+      "UPDATE-STEP-FORETOLD",
       Severity.NOTE,
-      "A forecast takes base motion as none, and its base gauges as without error.",
-      "Expect somewhat wider intervals."),
+      "A table computed elsewhere is compared with what the table before it foretold.",
+      "Nothing to do where the difference is small against the uncertainty of the test."),
   /** The cut of a truncated flexibility lies in a gap of the frequencies. */
   CUT_MOVED(
       "UPDATE-CUT-MOVED",

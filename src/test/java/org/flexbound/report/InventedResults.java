@@ -201,6 +201,7 @@ final class InventedResults {
             new Validation(
                 CONFIGURATION, gauge(0), load(0), 1.1e-6, 1.08e-6, 2e-8, 1.04e-6, 1.12e-6, 1.0,
                 true, "m/N")),
+        Optional.empty(),
         List.of(),
         List.of(new Energy(CONFIGURATION, name.apply("R00"), 11.3, true)),
         curves);
@@ -336,10 +337,20 @@ final class InventedResults {
         List.of(
             new Group(
                 List.of(name.apply("base rz"), name.apply("knee ry")), List.of(0.7, 0.7), 0.4, 0.06,
-                true, name.apply("base rz · knee ry = 0.31"))),
+                0.28, 0.52, true, name.apply("base rz · knee ry = 0.31"))),
         List.of(20.0, 0.4), 1, List.of(List.of(1.0, 0.1), List.of(0.1, 1.0)),
         List.of(new GainEstimate("cell / cert 1", "load cell", 0.005, 0.001, 0.004)),
-        List.of(), List.of(), List.of(), Optional.empty(), 0.5, true, "the step became small", 6, 7,
-        1, true);
+        List.of(
+            new Fit(
+                CONFIGURATION, gauge(0), load(0), 1.01e-6, 0.4, -3.8, true, List.of(1.4, -0.2))),
+        List.of(), List.of(
+            new WithoutCase(
+                CONFIGURATION, load(0),
+                List.of(
+                    new ParameterWithout(name.apply("base rz"), OptionalDouble.of(1.2e6), 2.4),
+                    new ParameterWithout(name.apply("knee ry"), OptionalDouble.empty(), -0.1)),
+                14, 12, false)),
+        Optional.empty(), new Unexplained(12, 8, 0.01, List.of(CONFIGURATION + ": " + gauge(0))),
+        true, "the step became small", 6, 7, 1e-12, List.of(new Start(true, 6.1, 6, 0)), true);
   }
 }

@@ -176,7 +176,8 @@ class ReportOutputsTest {
       workbook.forEach(sheet -> names.add(sheet.getSheetName()));
       assertThat(names)
           .containsExactly(
-              "Runs", "Coefficients", "Covariance", "Reciprocity", "Matrix checks", "Comparison", "Parameters",
+              "Runs", "Coefficients", "Covariance", "Reciprocity", "Matrix checks", "Comparison", "Parameters", "Update", "Combinations", "Without each case", "Influence",
+              "Trade-off", "Configurations", "Gains", "Held out",
               "Findings", "Readings used", "Charts", "Left out");
       assertThat(workbook.getSheet("Charts").getDrawingPatriarch().getCharts()).hasSize(15);
       double value = InventedResults.small().coefficients().get(0).value();

@@ -5,8 +5,10 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.SplittableRandom;
 import java.util.TreeMap;
+import java.util.stream.IntStream;
 import org.flexbound.flexibility.MeasuredFlexibility;
 import org.flexbound.frame.FrameModel;
+import org.flexbound.study.Study;
 
 /** How often intervals hold the truth, for each status apart; the simulated test is the unit. */
 final class Coverage {
@@ -18,17 +20,40 @@ final class Coverage {
   private int misfits;
   private int tests;
 
+  /**
+   * Simulates tests of a twin on all processors. Every test draws from its own stream and is counted
+   * in its turn, so that the table does not depend on how many there are.
+   */
   static Coverage of(Twin twin, int tests, long seed) {
     Coverage coverage = new Coverage();
     FrameModel frame = twin.frame();
+    Study study = twin.study();
     List<WorkingParameter> parameters = twin.working();
-    SplittableRandom random = new SplittableRandom(seed);
-    for (int t = 0; t < tests; t++) {
-      double[] x = twin.truth(parameters, random);
-      MeasuredFlexibility measured = twin.test(frame, x, parameters, random);
-      coverage.add(twin.update(measured, UpdateSettings.ESTIMATES).orRefuse(), parameters, x);
-    }
+    IntStream.range(0, tests)
+        .parallel()
+        .mapToObj(t -> one(twin, study, frame, parameters, new SplittableRandom(stream(seed, t))))
+        .toList()
+        .forEach(one -> coverage.add(one.result(), parameters, one.truth()));
     return coverage;
+  }
+
+  static long stream(long seed, int test) {
+    return seed * 1_000_003L + test;
+  }
+
+  @SuppressWarnings("ArrayRecordComponent") // handed over at once, not kept
+  private record One(UpdateResult result, double[] truth) {}
+
+  private static One one(
+      Twin twin,
+      Study study,
+      FrameModel frame,
+      List<WorkingParameter> parameters,
+      SplittableRandom random) {
+    double[] x = twin.truth(parameters, random);
+    MeasuredFlexibility measured = twin.test(frame, x, parameters, random);
+    return new One(
+        StudyUpdate.run(study, frame, List.of(measured), UpdateSettings.ESTIMATES).orRefuse(), x);
   }
 
   private void add(UpdateResult result, List<WorkingParameter> parameters, double[] x) {

@@ -8,8 +8,9 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.SplittableRandom;
+import org.flexbound.compare.ConfiguredFrame;
+import org.flexbound.compare.OutsideTable;
 import org.flexbound.document.JsonFile;
 import org.flexbound.finding.Finding;
 import org.flexbound.finding.Outcome;
@@ -20,10 +21,11 @@ import org.flexbound.flexibility.OutsideFlexibility;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.FrameReader;
 import org.flexbound.frame.StiffnessPath;
-import org.flexbound.setup.Instrument;
-import org.flexbound.setup.Load;
+import org.flexbound.reduce.ReductionProblem;
+import org.flexbound.reduce.TestPlanner;
 import org.flexbound.study.Study;
 import org.flexbound.study.StudyReader;
+import org.flexbound.testlog.TestLog;
 import org.junit.jupiter.api.Test;
 
 class StudyUpdateTest {
@@ -167,9 +169,11 @@ class StudyUpdateTest {
     }
     UpdateResult frame = twin.update(measured, UpdateSettings.FULL).orRefuse();
     UpdateResult outside =
-        StudyUpdate.runOutside(
+        OutsideUpdate.run(
                 twin.study(),
-                new OutsideFlexibility(entries, Where.nowhere()),
+                List.of(
+                    new OutsideTable(
+                        new OutsideFlexibility(entries, Where.nowhere()), Map.of())),
                 List.of(measured),
                 UpdateSettings.FULL)
             .orRefuse();
@@ -183,34 +187,8 @@ class StudyUpdateTest {
 
   @Test
   void aForecastBeforeTheTestTellsWhichParametersItWouldSee() {
-    Twin twin = Twin.gantry();
-    MeasuredFlexibility shape = nominalTest(twin, 1);
-    List<Load> loads =
-        shape.loads().stream()
-            .map(
-                l ->
-                    new Load(
-                        l.name(),
-                        l.points(),
-                        l.instrument(),
-                        OptionalDouble.of(4000),
-                        l.remark(),
-                        l.where()))
-            .toList();
-    List<Instrument> instruments = new ArrayList<>();
-    shape.gauges().forEach(g -> instruments.add(instrument(g.instrument().orElseThrow(), 0.005)));
-    instruments.add(instrument("cell", 0.01));
-    PlannedTest plan =
-        new PlannedTest(
-            Study.ONLY_CONFIGURATION,
-            instruments,
-            shape.gauges(),
-            loads,
-            OptionalDouble.of(0.007),
-            3);
-    UpdateResult forecast =
-        StudyUpdate.beforeTest(twin.study(), twin.frame(), List.of(plan)).orRefuse();
     Map<String, Status> statuses = new LinkedHashMap<>();
+    UpdateResult forecast = forecast(Twin.gantry());
     forecast.parameters().forEach(p -> statuses.put(p.name(), p.status()));
     assertThat(statuses.get("foot sideways")).isEqualTo(Status.IDENTIFIED);
     assertThat(statuses.get("foot down")).isEqualTo(Status.NOT_IDENTIFIABLE);
@@ -218,18 +196,34 @@ class StudyUpdateTest {
         .allSatisfy(p -> assertThat(p.factor()).isCloseTo(1, within(1e-9)));
   }
 
-  private static Instrument instrument(String name, double gain) {
-    return new Instrument(
-        name,
-        "",
-        "",
-        "",
-        "",
-        OptionalDouble.of(gain),
-        OptionalDouble.of(2e-6),
-        OptionalDouble.empty(),
-        OptionalDouble.empty(),
-        Where.nowhere());
+  @Test
+  void aForecastPromisesWhatATestOfTheNominalStructureThenKeeps() {
+    for (Twin twin : Twin.all()) {
+      UpdateResult forecast = forecast(twin);
+      UpdateResult kept =
+          twin.update(nominalTest(twin, 12), UpdateSettings.ESTIMATES).orRefuse();
+      for (int k = 0; k < forecast.parameters().size(); k++) {
+        // the test's scatter is itself estimated: 20 to 30 % with its few degrees of freedom
+        assertThat(
+                forecast.parameters().get(k).posteriorStandardDeviation()
+                    / kept.parameters().get(k).posteriorStandardDeviation())
+            .as(twin.name() + ": " + forecast.parameters().get(k).name())
+            .isBetween(0.6, 1.6);
+      }
+    }
+  }
+
+  private static UpdateResult forecast(Twin twin) {
+    TestLog log = twin.planned();
+    FrameModel frame = twin.frame();
+    double[][] computed =
+        ConfiguredFrame.nominal(frame, log.gauges(), log.loads()).orRefuse();
+    MeasuredFlexibility expected =
+        TestPlanner.plan(
+                new ReductionProblem(Study.ONLY_CONFIGURATION, log, Twin.places(frame)), computed)
+            .orRefuse()
+            .flexibility();
+    return StudyUpdate.beforeTest(twin.study(), frame, List.of(expected)).orRefuse();
   }
 
   @Test

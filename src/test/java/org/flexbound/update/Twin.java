@@ -1,10 +1,12 @@
 package org.flexbound.update;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.SplittableRandom;
 import org.flexbound.document.JsonFile;
 import org.flexbound.finding.Outcome;
@@ -16,7 +18,13 @@ import org.flexbound.frame.StiffnessSetting;
 import org.flexbound.reduce.Places;
 import org.flexbound.reduce.Reducer;
 import org.flexbound.reduce.ReductionProblem;
+import org.flexbound.setup.BeddingIn;
+import org.flexbound.setup.DecisionRule;
 import org.flexbound.setup.Direction;
+import org.flexbound.setup.FitRange;
+import org.flexbound.setup.QualityLimits;
+import org.flexbound.setup.ReductionOptions;
+import org.flexbound.setup.SlopeFit;
 import org.flexbound.setup.Station;
 import org.flexbound.setup.Vector;
 import org.flexbound.solve.FlexibilitySolution;
@@ -148,16 +156,44 @@ record Twin(
         maker.run(load + " run " + run, load.substring(0, load.lastIndexOf(' ')), rows);
       }
     }
-    FrameModel nominal = frame();
-    Places places =
-        station ->
-            station instanceof Station.AtNode at
-                ? Optional.of(nominal.place(at.node()).plus(at.offset()))
-                : Optional.empty();
     return Reducer.reduce(
-            new ReductionProblem(Study.ONLY_CONFIGURATION, maker.log(), places))
+            new ReductionProblem(
+                Study.ONLY_CONFIGURATION, maker.log(), places(trueFrame)))
         .orRefuse()
         .flexibility();
+  }
+
+  static Places places(FrameModel frame) {
+    return station ->
+        station instanceof Station.AtNode at
+            ? Optional.of(frame.place(at.node()).plus(at.offset()))
+            : Optional.empty();
+  }
+
+  /** The log of the test before it is run: load steps, and no reading of any gauge. */
+  TestLog planned() {
+    TestLogMaker maker = maker();
+    maker.options(
+        new ReductionOptions(
+            OptionalDouble.of(SCATTER),
+            FitRange.USUAL,
+            Map.of(),
+            BeddingIn.KEEP,
+            SlopeFit.AUTOMATIC,
+            ReductionOptions.STANDARD_GRAVITY,
+            true,
+            QualityLimits.USUAL,
+            DecisionRule.GUARD_BAND));
+    for (String load : loads) {
+      double[] row = new double[1 + gauges.size()];
+      Arrays.fill(row, Double.NaN);
+      row[0] = Double.parseDouble(load.split(" ", -1)[2]);
+      for (int run = 0; run < RUNS; run++) {
+        maker.run(
+            load + " run " + run, load.substring(0, load.lastIndexOf(' ')), new double[][] {row});
+      }
+    }
+    return maker.log();
   }
 
   Outcome<UpdateResult> update(MeasuredFlexibility measured, UpdateSettings settings) {

@@ -9,6 +9,7 @@ import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.SplittableRandom;
+import java.util.stream.IntStream;
 import org.flexbound.document.JsonFile;
 import org.flexbound.flexibility.MeasuredFlexibility;
 import org.flexbound.frame.FrameModel;
@@ -115,6 +116,14 @@ class TwinsTest {
         == Verdict.MISFITS_EVEN_AT_BEST;
   }
 
+  private static int misfits(Twin twin, Twin outside, int tests, long seed) {
+    return (int)
+        IntStream.range(0, tests)
+            .parallel()
+            .filter(t -> endsAsMisfit(twin, outside, Coverage.stream(seed, t)))
+            .count();
+  }
+
   @Test
   @Tag("long")
   void intervalsCoverAsStatedOverAThousandTestsOfEachTwin() throws IOException {
@@ -124,18 +133,19 @@ class TwinsTest {
     Coverage all = new Coverage();
     long seed = 1000;
     int tests = Integer.getInteger("twins", LONG);
+    String only = System.getProperty("twins.only", "");
     for (Twin twin : Twin.all()) {
-      Coverage own = Coverage.of(twin, tests, seed++);
+      seed++;
+      if (!twin.name().contains(only)) {
+        continue;
+      }
+      Coverage own = Coverage.of(twin, tests, seed);
       text.append(own.table(twin.name()));
       all.merge(own);
     }
     text.append(all.table("all"));
-    int bracket = 0;
-    int portal = 0;
-    for (int t = 0; t < tests; t++) {
-      bracket += endsAsMisfit(Twin.bracket(""), Twin.bracket(PROP), 5000 + t) ? 1 : 0;
-      portal += endsAsMisfit(Twin.portal(""), Twin.portal(HINGE), 9000 + t) ? 1 : 0;
-    }
+    int bracket = misfits(Twin.bracket(""), Twin.bracket(PROP), tests, 5);
+    int portal = misfits(Twin.portal(""), Twin.portal(HINGE), tests, 9);
     text.append("| bracket with a prop that the model lacks | ended as misfits | ")
         .append(tests + " | | " + 100.0 * bracket / tests + " % |\n")
         .append("| portal with a hinge that the model lacks | ended as misfits | ")
@@ -146,7 +156,8 @@ class TwinsTest {
       assertThat(all.share(status)).as(status).isGreaterThanOrEqualTo(0.93 - slack);
     }
     for (String status : List.of(Status.IDENTIFIED.words(), Coverage.combination())) {
-      assertThat(all.share(status)).as(status).isBetween(0.93 - 0.005, 0.97 + 0.005);
+      double slack = 2 * all.error(status);
+      assertThat(all.share(status)).as(status).isBetween(0.93 - slack, 0.97 + slack);
     }
     assertThat(bracket).isGreaterThan((int) (0.95 * tests));
     assertThat(portal).isGreaterThan((int) (0.95 * tests));

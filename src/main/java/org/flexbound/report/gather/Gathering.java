@@ -9,6 +9,7 @@ import java.util.Map;
 import java.util.Optional;
 import org.flexbound.finding.Finding;
 import org.flexbound.frame.FrameModel;
+import org.flexbound.reduce.PlannedFlexibility;
 import org.flexbound.reduce.Reduction;
 import org.flexbound.report.Program;
 import org.flexbound.report.results.Absolute;
@@ -29,6 +30,7 @@ import org.flexbound.report.results.MatrixCheck;
 import org.flexbound.report.results.OperatorRow;
 import org.flexbound.report.results.Option;
 import org.flexbound.report.results.Parameter;
+import org.flexbound.report.results.Plan;
 import org.flexbound.report.results.Reciprocity;
 import org.flexbound.report.results.Results;
 import org.flexbound.report.results.Run;
@@ -65,6 +67,7 @@ public final class Gathering {
   private String modelFile = "";
   private Optional<org.flexbound.compare.Comparison> comparison = Optional.empty();
   private Optional<UpdateResult> update = Optional.empty();
+  private Optional<Plan> plan = Optional.empty();
 
   /**
    * Begins with nothing.
@@ -129,17 +132,7 @@ public final class Gathering {
    * @param changes how the configuration differs from the model, one sentence each
    */
   public void configuration(TestLog log, String file, Reduction reduction, List<String> changes) {
-    String name = reduction.flexibility().configuration();
-    SetupPart setup = new SetupPart(model, name);
-    configurations.add(new Configuration(name, file, SetupPart.test(log.information()), changes));
-    instruments.addAll(setup.instruments(log));
-    loads.addAll(setup.loads(log));
-    gauges.addAll(setup.gauges(log));
-    for (Option option : SetupPart.options(log.options())) {
-      if (!options.contains(option)) {
-        options.add(option);
-      }
-    }
+    setup(log, file, reduction.flexibility().configuration(), changes);
     ReductionPart part = new ReductionPart(reduction, log);
     runs.addAll(part.runs());
     excluded.addAll(part.excluded());
@@ -154,6 +147,36 @@ public final class Gathering {
     CurvePart curvePart = new CurvePart(reduction, log);
     curves.addAll(curvePart.curves());
     energy.addAll(curvePart.energy());
+  }
+
+  private void setup(TestLog log, String file, String name, List<String> changes) {
+    SetupPart setup = new SetupPart(model, name);
+    configurations.add(new Configuration(name, file, SetupPart.test(log.information()), changes));
+    instruments.addAll(setup.instruments(log));
+    loads.addAll(setup.loads(log));
+    gauges.addAll(setup.gauges(log));
+    for (Option option : SetupPart.options(log.options())) {
+      if (!options.contains(option)) {
+        options.add(option);
+      }
+    }
+  }
+
+  /**
+   * One configuration whose test is only planned; the model, if any, comes first.
+   *
+   * @param log the log, with or without readings
+   * @param file the log's file
+   * @param planned what the test would measure
+   * @param changes how the configuration differs from the model, one sentence each
+   */
+  public void planned(
+      TestLog log, String file, PlannedFlexibility planned, List<String> changes) {
+    setup(log, file, planned.flexibility().configuration(), changes);
+    PlanPart part = new PlanPart(log, planned);
+    plan =
+        Optional.of(
+            plan.map(before -> PlanPart.joined(before, part.plan())).orElseGet(part::plan));
   }
 
   /**
@@ -222,6 +245,7 @@ public final class Gathering {
                         (gauge, load) ->
                             units.getOrDefault(ComparisonPart.key(first, gauge, load), "m/N")))
             .orElse(List.<Validation>of()),
+        plan,
         List.of(),
         energy,
         curves);

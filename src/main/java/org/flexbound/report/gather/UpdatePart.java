@@ -14,8 +14,11 @@ import org.flexbound.report.results.JointTest;
 import org.flexbound.report.results.Misfit;
 import org.flexbound.report.results.Parameter;
 import org.flexbound.report.results.Profile;
+import org.flexbound.report.results.ParameterWithout;
 import org.flexbound.report.results.ProfilePoint;
+import org.flexbound.report.results.Start;
 import org.flexbound.report.results.TradeOff;
+import org.flexbound.report.results.Unexplained;
 import org.flexbound.report.results.Update;
 import org.flexbound.report.results.Validation;
 import org.flexbound.report.results.WithoutCase;
@@ -23,6 +26,7 @@ import org.flexbound.study.Rule;
 import org.flexbound.update.ParameterResult;
 import org.flexbound.update.PredictedCase;
 import org.flexbound.update.UpdateResult;
+import org.flexbound.update.WithoutLoadCase;
 
 /** What an update found. */
 final class UpdatePart {
@@ -93,6 +97,8 @@ final class UpdatePart {
                         g.weights(),
                         g.value(),
                         g.standardDeviation(),
+                        g.lower95(),
+                        g.upper95(),
                         g.determined(),
                         g.inWords()))
             .toList();
@@ -135,7 +141,10 @@ final class UpdatePart {
                     new WithoutCase(
                         w.configuration(),
                         w.load(),
-                        w.shifts().stream().map(Values::orZero).toList()))
+                        without(r, w),
+                        w.prediction().misfit(),
+                        Values.orZero(w.prediction().limit()),
+                        w.prediction().misfit() <= w.prediction().limit()))
             .toList();
     return new Update(
         rule(r.rule()),
@@ -157,13 +166,35 @@ final class UpdatePart {
         configurations,
         without,
         validation(r),
-        Values.orZero(r.unexplained().misfit()),
+        new Unexplained(
+            Values.orZero(r.unexplained().misfit()),
+            Values.orZero(r.unexplained().degreesOfFreedom()),
+            Values.orZero(r.unexplained().correctionSize()),
+            r.unexplained().worst()),
         r.convergence().converged(),
         r.convergence().reason(),
         r.convergence().iterations(),
         r.convergence().evaluations(),
-        r.convergence().starts().size(),
+        Values.orZero(r.convergence().projectedGradient()),
+        r.convergence().starts().stream()
+            .map(
+                s ->
+                    new Start(
+                        s.converged(), Values.orZero(s.objective()), s.iterations(), s.distance()))
+            .toList(),
         r.convergence().startsAgree());
+  }
+
+  private static List<ParameterWithout> without(UpdateResult r, WithoutLoadCase w) {
+    List<ParameterWithout> list = new ArrayList<>();
+    for (int k = 0; k < r.parameters().size(); k++) {
+      list.add(
+          new ParameterWithout(
+              r.parameters().get(k).name(),
+              Values.finite(w.values().get(k)),
+              Values.orZero(w.shifts().get(k))));
+    }
+    return list;
   }
 
   private static String rule(Rule rule) {

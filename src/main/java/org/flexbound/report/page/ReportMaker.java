@@ -33,7 +33,11 @@ public final class ReportMaker {
   public static ReportPage make(Results results, UnitSystem units) {
     Shown shown = new Shown(units);
     List<Section> sections = new ArrayList<>();
-    sections.add(new AnswerSection(results, shown).make());
+    sections.add(
+        results
+            .plan()
+            .map(plan -> new PlanAnswer(results, plan, shown).make())
+            .orElseGet(() -> new AnswerSection(results, shown).make()));
     sections.add(findings(results));
     sections.addAll(figures(results, units));
     sections.add(new TableSection(results, shown).make());

@@ -32,6 +32,7 @@ final class TableSection {
 
   Section make() {
     List<Block> blocks = new ArrayList<>();
+    results.plan().ifPresent(plan -> new PlanTables(plan, shown, several).add(blocks));
     add(blocks, runs());
     matrices(blocks);
     add(blocks, coefficients());
@@ -41,6 +42,7 @@ final class TableSection {
     add(blocks, comparison());
     add(blocks, parameters());
     add(blocks, priors());
+    new UpdateTables(results, shown).add(blocks);
     add(blocks, gains());
     add(blocks, validation());
     return new Section("tables", "Tables", blocks);
@@ -286,7 +288,10 @@ final class TableSection {
 
   private TableMaker parameters() {
     TableMaker table =
-        new TableMaker("Parameters")
+        new TableMaker(
+                results.plan().isPresent()
+                    ? "What the test would tell of each parameter, if the nominal model were true"
+                    : "Parameters")
             .text("Parameter")
             .number("Nominal", "Updated", "Factor")
             .text("95 % interval", "Status")
@@ -350,7 +355,10 @@ final class TableSection {
 
   private TableMaker gains() {
     TableMaker table =
-        new TableMaker("Gains of the instruments, as the fit found them")
+        new TableMaker(
+                results.plan().isPresent()
+                    ? "Gains of the instruments, as the test would know them"
+                    : "Gains of the instruments, as the fit found them")
             .text("Instrument and calibration")
             .number("Stated u", "Fitted", "Standard deviation after");
     for (GainEstimate gain :

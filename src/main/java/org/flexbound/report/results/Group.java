@@ -9,6 +9,8 @@ import java.util.List;
  * @param weights the combination of the changes in the working variables, of unit length
  * @param value its value at the estimate
  * @param standardDeviation its posterior standard deviation
+ * @param lower95 lower end of its 95 % interval
+ * @param upper95 upper end of its 95 % interval
  * @param determined whether the data removed more than 90 % of its prior variance
  * @param inWords the combination for people
  */
@@ -17,6 +19,8 @@ public record Group(
     List<Double> weights,
     double value,
     double standardDeviation,
+    double lower95,
+    double upper95,
     boolean determined,
     String inWords) {
   /** Copies the lists. */

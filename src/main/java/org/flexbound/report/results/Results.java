@@ -34,6 +34,7 @@ import java.util.Optional;
  * @param parameters the stiffnesses that the update may change
  * @param update how the update ended
  * @param validation held-out coefficients
+ * @param plan the planned test, where nothing has been measured yet
  * @param limits acceptance limits and decisions
  * @param energy stored energy of the runs
  * @param curves load-deflection curves
@@ -67,6 +68,7 @@ public record Results(
     List<Parameter> parameters,
     Optional<Update> update,
     List<Validation> validation,
+    Optional<Plan> plan,
     List<Limit> limits,
     List<Energy> energy,
     List<Curve> curves) {

@@ -34,7 +34,9 @@ import java.util.OptionalDouble;
  * @param reason why the solver stopped
  * @param iterations number of outer iterations
  * @param evaluations number of evaluations of the computed flexibility
- * @param starts number of starting points
+ * @param projectedGradient largest component of the projected gradient at the end, relative to
+ *     its size at the nominal model
+ * @param starts the starting points
  * @param startsAgree whether all starts that converged came to the same point
  */
 public record Update(
@@ -57,12 +59,13 @@ public record Update(
     List<ConfigurationFit> configurations,
     List<WithoutCase> withoutLoadCase,
     Optional<JointTest> validation,
-    double unexplained,
+    Unexplained unexplained,
     boolean converged,
     String reason,
     int iterations,
     int evaluations,
-    int starts,
+    double projectedGradient,
+    List<Start> starts,
     boolean startsAgree) {
   /** Copies the lists. */
   public Update {
@@ -74,5 +77,6 @@ public record Update(
     fits = List.copyOf(fits);
     configurations = List.copyOf(configurations);
     withoutLoadCase = List.copyOf(withoutLoadCase);
+    starts = List.copyOf(starts);
   }
 }

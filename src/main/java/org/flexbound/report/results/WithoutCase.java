@@ -7,15 +7,20 @@ import java.util.List;
  *
  * @param configuration the configuration
  * @param load the load case left out
- * @param shift for each parameter, how far the estimate moves, in posterior standard
- *     deviations
+ * @param parameters the estimates without it, in the order of the parameters
+ * @param misfit how badly the others predict it, gains shared
+ * @param limit what that misfit may be
+ * @param predicted whether it stays within its limit
  */
 public record WithoutCase(
     String configuration,
     String load,
-    List<Double> shift) {
+    List<ParameterWithout> parameters,
+    double misfit,
+    double limit,
+    boolean predicted) {
   /** Copies the lists. */
   public WithoutCase {
-    shift = List.copyOf(shift);
+    parameters = List.copyOf(parameters);
   }
 }

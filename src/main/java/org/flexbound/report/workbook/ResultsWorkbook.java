@@ -17,6 +17,7 @@ import org.flexbound.report.results.Comparison;
 import org.flexbound.report.results.Covariance;
 import org.flexbound.report.results.Exclusion;
 import org.flexbound.report.results.Finding;
+import org.flexbound.report.results.JointClass;
 import org.flexbound.report.results.Parameter;
 import org.flexbound.report.results.Reciprocity;
 import org.flexbound.report.results.Results;
@@ -55,6 +56,7 @@ public final class ResultsWorkbook {
       MatrixSheets.write(workbook, styles, results);
       comparison();
       parameters();
+      new UpdateSheets(workbook, styles, results, units).write();
       findings();
       new ReadingsSheet(workbook, styles, units).write(results);
       left();
@@ -188,7 +190,8 @@ public final class ResultsWorkbook {
             workbook, styles, "Parameters", "Parameter", "Scales", "Nominal", "Updated", "Factor",
             "Lower 95 %", "Upper 95 %", "Lower bound", "Upper bound", "Unit", "Working variable",
             "Prior standard deviation", "Posterior standard deviation", "Variance removed", "Status",
-            "On a bound", "Justification");
+            "On a bound", "Justification", "EN 1993-1-8 before", "EN 1993-1-8 after",
+            "AISC 360 before", "AISC 360 after");
     for (Parameter p : results.parameters()) {
       // A factor has no unit; everything else is shown in the unit of its stiffness.
       boolean factor = p.unit().equals("1");
@@ -199,7 +202,10 @@ public final class ResultsWorkbook {
           shown(p.lowerBound(), unit), shown(p.upperBound(), unit),
           factor ? "× nominal" : units.symbol(unit), p.working(), p.priorStandardDeviation(),
           p.posteriorStandardDeviation(), p.varianceRemoved(), p.status(), p.onBound(),
-          p.justification());
+          p.justification(), p.classBefore().map(JointClass::en1993).orElse(""),
+          p.classAfter().map(JointClass::en1993).orElse(""),
+          p.classBefore().map(JointClass::aisc360).orElse(""),
+          p.classAfter().map(JointClass::aisc360).orElse(""));
     }
     sheet.finish();
   }
