@@ -2,8 +2,12 @@ package org.flexbound.app;
 
 import java.io.PrintWriter;
 import java.nio.file.Path;
+import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Locale;
 import java.util.OptionalDouble;
+import java.util.Set;
+import org.flexbound.reduce.RunVerdict;
 import org.flexbound.report.Rounded;
 import org.flexbound.report.UnitSystem;
 import org.flexbound.report.results.Coefficient;
@@ -69,21 +73,31 @@ final class Summary {
   }
 
   private void runs() {
-    if (results.runs().isEmpty()) {
-      return;
-    }
     heading("Runs");
-    TextTable table =
-        new TextTable().text("run").text("loads").text("verdict").number("steps").text("reasons");
+    TextTable table = new TextTable().text("run").text("loads").text("verdict").number("steps");
+    Set<String> given = new LinkedHashSet<>();
     for (Run run : results.runs()) {
+      given.add(run.verdict());
       table.row(
           name(run.configuration(), run.name()),
           String.join(", ", run.loads()),
           run.verdict() + (run.used() ? "" : ", not used"),
-          String.valueOf(run.steps()),
-          String.join("; ", run.reasons()));
+          String.valueOf(run.steps()));
     }
     table.print(out);
+    for (Run run : results.runs()) {
+      if (!run.reasons().isEmpty()) {
+        String words = "  " + PlainText.of(name(run.configuration(), run.name())) + ": " + run.verdict() + ", because";
+        out.println(run.verdict().equals("repeat") ? terminal.bad(words) : terminal.warn(words));
+        run.reasons().forEach(reason -> out.println("    " + PlainText.of(reason)));
+      }
+    }
+    for (RunVerdict verdict : RunVerdict.values()) {
+      String word = verdict.name().toLowerCase(Locale.ROOT);
+      if (verdict != RunVerdict.ACCEPT && given.contains(word)) {
+        out.println("  rule for " + word + ": " + verdict.rule());
+      }
+    }
   }
 
   private void coefficients() {

@@ -58,6 +58,12 @@ public enum ReduceFinding implements FindingKind {
       "A response is curved, significantly and by more than its limit.",
       "Look for slip, gaps or large deflection; fit a narrower range, or do not use this"
           + " coefficient."),
+  /** Pull and push differ. */
+  PULL_PUSH(
+      "RED-PULL-PUSH",
+      Severity.WARNING,
+      "Slopes under pull and under push differ, significantly and by more than the limit of repeatability.",
+      "Look for gaps and for bolted joints that open; take one direction alone by its own runs."),
   /** Scatter about the line is large. */
   NOT_LINEAR(
       "RED-NOT-LINEAR",

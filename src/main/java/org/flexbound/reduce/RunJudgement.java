@@ -1,23 +1,22 @@
 package org.flexbound.reduce;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
-import org.flexbound.finding.FindingKind;
+import java.util.Map;
 import org.flexbound.finding.Findings;
+import org.flexbound.quantity.Dimension;
 import org.flexbound.setup.QualityLimits;
 import org.flexbound.testlog.Run;
 
 /**
- * Judges a run by its quality figures. Only gauges that moved by more than a small share of the
- * largest motion of their kind count: a gauge that hardly moves has large shares of nothing.
+ * Judges a run by the faults of its columns and by the quality figures of its slopes. Only gauges
+ * that moved by more than a small share of the largest motion of their kind count: a gauge that
+ * hardly moves has large shares of nothing.
  */
 final class RunJudgement {
-  /** Gauges below this share of the largest span of the run are not judged by shares of span. */
+  /** Gauges below this share of the largest span of their kind are not judged by shares of span. */
   private static final double MOVED = 0.02;
-
-  /** Several times a limit: not doubtful any more, but to be repeated (common practice). */
-  private static final double FAR = 3;
 
   private final QualityLimits limits;
   private final GaugeNoise noise;
@@ -36,19 +35,22 @@ final class RunJudgement {
 
   RunResult judge(
       Run run, List<String> loads, double peak, int steps, int cycles, List<RunSlope> slopes) {
-    double largest =
-        slopes.stream()
-            .flatMap(slope -> slope.quality().stream())
-            .mapToDouble(SlopeQuality::span)
-            .max()
-            .orElse(0);
+    Map<String, Dimension> kinds = new LinkedHashMap<>();
+    run.gauges().forEach(gauge -> kinds.put(gauge.name(), gauge.unit().dimension()));
+    Map<Dimension, Double> largest = new LinkedHashMap<>();
+    for (RunSlope slope : slopes) {
+      largest.merge(kinds.getOrDefault(slope.gauge(), Dimension.NUMBER), span(slope), Math::max);
+    }
     for (GaugeFault fault : faults) {
       if (fault.weight() != RunVerdict.ACCEPT) {
         worse(fault.weight(), fault.column() + " " + fault.text());
       }
     }
     for (RunSlope slope : slopes) {
-      slope.quality().ifPresent(quality -> judge(run, slope, quality, largest));
+      Dimension kind = kinds.getOrDefault(slope.gauge(), Dimension.NUMBER);
+      if (!explained(slope) && span(slope) >= MOVED * largest.getOrDefault(kind, 0.0)) {
+        new SlopeJudgement(run, slope, limits, noise, findings).judge().forEach(this::worse);
+      }
     }
     if (!slopes.isEmpty() && slopes.stream().noneMatch(RunSlope::isFitted)) {
       worse(RunVerdict.REPEAT, "no slope could be fitted");
@@ -78,71 +80,20 @@ final class RunJudgement {
     reasons.add(reason);
   }
 
-  private void judge(Run run, RunSlope slope, SlopeQuality quality, double largest) {
-    boolean explained =
-        faults.stream()
-            .anyMatch(
-                fault ->
-                    fault.explainsDepartures()
-                        && (fault.column().equals(slope.gauge())
-                            || fault.column().equals(slope.load())));
-    if (explained || quality.span() < MOVED * largest) {
-      return;
-    }
-    over(
-        ReduceFinding.NOT_LINEAR,
-        run,
-        slope,
-        "departure from the line",
-        quality.linearity(),
-        limits.linearity());
-    over(
-        ReduceFinding.HYSTERESIS,
-        run,
-        slope,
-        "gap between loading and unloading",
-        quality.hysteresis(),
-        limits.hysteresis());
-    over(
-        ReduceFinding.ZERO_RETURN,
-        run,
-        slope,
-        "reading that does not come back",
-        Math.abs(quality.zeroReturn()),
-        limits.zeroReturn());
-    if (quality.curvatureProbability() < noise.levelOfOneSlope()) {
-      over(
-          ReduceFinding.CURVED,
-          run,
-          slope,
-          "curvature",
-          Math.abs(quality.curvature()),
-          limits.curvature());
-    }
+  private void worse(SlopeJudgement.Reason reason) {
+    worse(reason.weight(), reason.text());
   }
 
-  /** Tells a share of span that is over its limit and more than the gauge's noise makes. */
-  private void over(
-      ReduceFinding kind, Run run, RunSlope slope, String what, double value, double limit) {
-    double span = slope.quality().map(SlopeQuality::span).orElse(0.0);
-    if (!(value > limit) || !(value * span > noise.allowance(slope.gauge(), limit))) {
-      return;
-    }
-    found(
-        kind,
-        run,
-        slope,
-        String.format(
-            Locale.ROOT, "%s %.1f %%, limit %.1f %%", what, 100 * value, 100 * limit),
-        value > FAR * limit ? RunVerdict.REPEAT : RunVerdict.DOUBTFUL);
+  private static double span(RunSlope slope) {
+    return slope.quality().map(SlopeQuality::span).orElse(0.0);
   }
 
-  private void found(
-      FindingKind kind, Run run, RunSlope slope, String text, RunVerdict weight) {
-    findings.add(
-        kind,
-        slope.steps().isEmpty() ? run.where() : slope.steps().get(0).where(),
-        "'" + slope.gauge() + "' under '" + slope.load() + "' in run '" + run.name() + "': " + text);
-    worse(weight, slope.gauge() + ": " + text);
+  /** Whether a fault of the gauge or of the load column explains whatever departs from the line. */
+  private boolean explained(RunSlope slope) {
+    return faults.stream()
+        .anyMatch(
+            fault ->
+                fault.explainsDepartures()
+                    && (fault.column().equals(slope.gauge()) || fault.column().equals(slope.load())));
   }
 }

@@ -135,7 +135,7 @@ class PublishedReadingsTest {
     assertThat(usual.runs()).allMatch(run -> run.verdict() == RunVerdict.ACCEPT);
     Reduction strict = loadCell(0.002);
     assertThat(strict.findings()).filteredOn(finding -> finding.code().equals("RED-CURVED")).hasSize(2)
-        .allSatisfy(finding -> assertThat(finding.message()).contains("curvature 0.3 %, limit 0.2 %"));
+        .allSatisfy(finding -> assertThat(finding.message()).contains("curvature 0.3 % of span, limit 0.2 %"));
     assertThat(strict.runs()).allMatch(run -> run.verdict() == RunVerdict.DOUBTFUL);
   }
 }

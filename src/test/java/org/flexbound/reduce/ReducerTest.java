@@ -391,4 +391,49 @@ class ReducerTest {
     assertThat(pair.second()).isCloseTo(3e-6, within(1e-8));
     assertThat(pair.probability()).isLessThan(1e-6);
   }
+
+  @Test
+  void pullAndPushThatDifferAreToldWithTheirSlopes() {
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0, 0, 0)
+            .instrument("dial", 0, 0, 0)
+            .load("LA", "A", DOWN, "cell")
+            .gauge("GA", "A", DOWN, "dial", false);
+    double[][] pull = rows(new double[] {2e-6}, 1e-6, new Random(1));
+    double[][] push = rows(new double[] {2.1e-6}, 1e-6, new Random(2));
+    double[][] both = new double[22][];
+    for (int k = 0; k < 11; k++) {
+      both[k] = pull[k];
+      both[11 + k] = new double[] {-push[k][0], 0.002 - push[k][1]};
+    }
+    maker.run("1", "LA", both);
+    Reduction reduction = reduce(maker);
+    assertThat(reduction.findings())
+        .filteredOn(finding -> finding.code().equals("RED-PULL-PUSH"))
+        .singleElement()
+        .satisfies(finding -> assertThat(finding.message()).contains("by -4.").contains("limit 2.0 %"));
+    assertThat(reduction.runs().get(0).verdict()).isNotEqualTo(RunVerdict.ACCEPT);
+  }
+
+  @Test
+  void aGaugeIsJudgedAmongThoseOfItsKind() {
+    Direction tilt = Direction.about(new Vector(0, 1, 0));
+    TestLogMaker maker =
+        new TestLogMaker()
+            .instrument("cell", 0, 0, 0)
+            .instrument("dial", 0, 0, 0)
+            .load("LA", "A", DOWN, "cell")
+            .gauge("GA", "A", DOWN, "dial", false)
+            .gauge("tilt", "A", tilt, "dial", false);
+    // a thousand times smaller as numbers go, but radians are no metres; its unloading is far off its loading
+    double[][] rows = rows(new double[] {2e-6, 2e-9}, 0, new Random(1));
+    for (int k = 6; k < rows.length; k++) {
+      rows[k][2] += 4e-7;
+    }
+    maker.run("1", "LA", rows);
+    Reduction reduction = reduce(maker);
+    assertThat(reduction.runs().get(0).verdict()).isNotEqualTo(RunVerdict.ACCEPT);
+    assertThat(reduction.runs().get(0).reasons()).anyMatch(reason -> reason.startsWith("tilt"));
+  }
 }

@@ -127,7 +127,14 @@ public final class TestLogMaker {
   public TestLogMaker run(String name, List<String> names, double[][] rows) {
     List<Channel> gaugeChannels =
         gauges.values().stream()
-            .map(g -> new Channel(g.name(), g.name(), Unit.METRE, g.instrument(), Where.nowhere()))
+            .map(
+                g ->
+                    new Channel(
+                        g.name(),
+                        g.name(),
+                        g.kind() == GaugeKind.ROTATION ? Unit.RADIAN : Unit.METRE,
+                        g.instrument(),
+                        Where.nowhere()))
             .toList();
     List<Channel> loadChannels =
         names.stream()
