@@ -16,10 +16,10 @@ final class CommandTree {
     root.addSubcommand("reduce", new ReduceCommand(terminal))
         .addSubcommand("compare", new CompareCommand(terminal))
         .addSubcommand("update", new UpdateCommand(terminal))
+        .addSubcommand("check", new CheckCommand(terminal))
+        .addSubcommand("recheck", new RecheckCommand(terminal))
+        .addSubcommand("trend", new TrendCommand(terminal))
         .addSubcommand("template", new TemplateCommand(terminal))
-        .addSubcommand("check", LaterCommand.make("compare a test with its acceptance limits"))
-        .addSubcommand("recheck", LaterCommand.make("compare a test with an earlier baseline"))
-        .addSubcommand("trend", LaterCommand.make("show how a fixture changed over its tests"))
         .addSubcommand("convert", new ConvertCommand(terminal))
         .addSubcommand("completion", new CompletionCommand(terminal));
     return root;

@@ -4,6 +4,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import org.flexbound.compare.OutsideTable;
 import org.flexbound.document.InputFolder;
@@ -165,6 +166,22 @@ record StudyFiles(
       inputs.add(new InputFile(name, WorkbookLog.sha256(file)));
     }
     return read.value();
+  }
+
+  /** Whether a file is a study: JSON with a key that only a study has. */
+  static boolean isStudy(Path file) {
+    String name = String.valueOf(file.getFileName());
+    if (!name.toLowerCase(Locale.ROOT).endsWith(".json")) {
+      return false;
+    }
+    Optional<Json> json = JsonFile.read(file, name).value();
+    return json.isEmpty()
+        || (json.get() instanceof Json.Members members
+            && (members.get("model").isPresent()
+                || members.get("outsideFlexibility").isPresent()
+                || members.get("log").isPresent()
+                || members.get("configurations").isPresent()
+                || members.get("parameters").isPresent()));
   }
 
   private static Optional<FrameModel> model(

@@ -54,6 +54,8 @@ final class Summary {
     reciprocity();
     comparison();
     parameters();
+    new RecheckSummary(terminal, results, units).print();
+    new LimitSummary(terminal, results).print();
     findings();
   }
 

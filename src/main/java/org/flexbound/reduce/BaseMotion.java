@@ -21,7 +21,7 @@ import org.flexbound.setup.Vector;
  * origin. A gauge's row is expressed by the base gauges' rows by minimum norm, and only where it
  * lies in what they span.
  */
-final class BaseMotion {
+public final class BaseMotion {
   /** Singular values below this share of the largest count as nothing. */
   private static final double RANK = 1e-6;
 
@@ -30,7 +30,12 @@ final class BaseMotion {
 
   private final Places places;
 
-  BaseMotion(Places places) {
+  /**
+   * With places.
+   *
+   * @param places where stations are
+   */
+  public BaseMotion(Places places) {
     this.places = places;
   }
 
@@ -81,7 +86,7 @@ final class BaseMotion {
    * @param bases the base gauges that were read
    * @return one weight for each; empty where they do not determine it
    */
-  Optional<double[]> weights(Gauge gauge, List<Gauge> bases) {
+  public Optional<double[]> weights(Gauge gauge, List<Gauge> bases) {
     List<Vector> points = new ArrayList<>();
     for (Gauge base : bases) {
       place(base.station(), base.coordinates()).ifPresent(points::add);

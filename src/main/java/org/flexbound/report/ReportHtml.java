@@ -29,6 +29,11 @@ final class ReportHtml {
     return render(content, resource("print.css"), "", true);
   }
 
+  /** A certificate for print: everything smaller, so that it fits one page. */
+  static String certificate(ReportPage content) {
+    return render(content, resource("print.css") + resource("certificate.css"), "", true);
+  }
+
   private static String render(ReportPage content, String style, String script, boolean print) {
     TemplateEngine engine =
         TemplateEngine.createPrecompiled(

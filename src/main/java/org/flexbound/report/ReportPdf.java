@@ -25,10 +25,18 @@ final class ReportPdf {
   private ReportPdf() {}
 
   static byte[] bytes(ReportPage content) {
+    return bytes(content, ReportHtml.print(content));
+  }
+
+  static byte[] certificate(ReportPage content) {
+    return bytes(content, ReportHtml.certificate(content));
+  }
+
+  private static byte[] bytes(ReportPage content, String html) {
     XRLog.setLoggingEnabled(false);
     PdfRendererBuilder builder = new PdfRendererBuilder();
     builder.useFastMode();
-    builder.withHtmlContent(printable(ReportHtml.print(content)), null);
+    builder.withHtmlContent(printable(html), null);
     builder.useUnicodeBidiSplitter(new ICUBidiSplitter.ICUBidiSplitterFactory());
     builder.useUnicodeBidiReorderer(new ICUBidiReorderer());
     builder.defaultTextDirection(TextDirection.LTR);

@@ -1,8 +1,12 @@
 package org.flexbound.report;
 
 import com.fasterxml.jackson.annotation.JsonInclude;
+import com.fasterxml.jackson.annotation.JsonSetter;
+import com.fasterxml.jackson.annotation.Nulls;
 import java.nio.charset.StandardCharsets;
+import java.util.List;
 import org.flexbound.report.results.Results;
+import org.flexbound.report.results.TrendResults;
 import tools.jackson.core.JacksonException;
 import tools.jackson.core.util.DefaultIndenter;
 import tools.jackson.core.util.DefaultPrettyPrinter;
@@ -23,6 +27,10 @@ public final class ResultsJson {
           .enable(SerializationFeature.INDENT_OUTPUT)
           .changeDefaultPropertyInclusion(
               include -> include.withValueInclusion(JsonInclude.Include.NON_ABSENT))
+          // a list that an earlier version did not write is an empty one
+          .withConfigOverride(
+              List.class,
+              list -> list.setNullHandling(JsonSetter.Value.forValueNulls(Nulls.AS_EMPTY)))
           .defaultPrettyPrinter(printer())
           .build();
 
@@ -40,6 +48,16 @@ public final class ResultsJson {
    */
   public static byte[] bytes(Results results) {
     return (MAPPER.writeValueAsString(results) + "\n").getBytes(StandardCharsets.UTF_8);
+  }
+
+  /**
+   * The bytes of trend.json.
+   *
+   * @param trend the history
+   * @return UTF-8, ending in a line feed
+   */
+  public static byte[] bytes(TrendResults trend) {
+    return (MAPPER.writeValueAsString(trend) + "\n").getBytes(StandardCharsets.UTF_8);
   }
 
   /**

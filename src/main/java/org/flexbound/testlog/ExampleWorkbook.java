@@ -83,6 +83,18 @@ public final class ExampleWorkbook {
           "Column",
           "Unit",
           "Instrument");
+      table(
+          workbook,
+          SheetLayout.LIMITS,
+          List.of(
+              new Object[] {"tip not too soft", "coefficient", "tip", "tip down", 12, "mm/kN"},
+              new Object[] {"no play", "hysteresis", "", "", 5, "%"}),
+          "Limit",
+          "On",
+          "Gauge",
+          "Load",
+          "Upper",
+          "Unit");
       runs(workbook);
       for (int run = 0; run < 6; run++) {
         readings(workbook, run);

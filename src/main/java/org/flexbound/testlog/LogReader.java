@@ -16,7 +16,6 @@ import org.flexbound.finding.Refusal;
 import org.flexbound.finding.Where;
 import org.flexbound.quantity.NearestWord;
 import org.flexbound.quantity.Unit;
-import org.flexbound.setup.DecisionRule;
 import org.flexbound.setup.Gauge;
 import org.flexbound.setup.Instrument;
 import org.flexbound.setup.LimitSpec;
@@ -132,26 +131,8 @@ final class LogReader {
             .table(SheetLayout.LIMITS)
             .map(table -> new LimitsReader(cells, findings).read(table))
             .orElse(List.of());
-    refuseLater(options, limits);
     return new TestLog(
         information, instruments, loads, gauges, runs, options, limits, given, inputs.get());
-  }
-
-  /** What the format knows and the program does not do yet is refused, never passed over. */
-  private void refuseLater(ReductionOptions options, List<LimitSpec> limits) {
-    if (!limits.isEmpty()) {
-      findings.add(
-          TestlogFinding.NOT_SUPPORTED_YET,
-          limits.get(0).where(),
-          "acceptance limits are not supported yet");
-    }
-    Where sheet = tables.where(SheetLayout.OPTIONS);
-    if (options.decisionRule() != DecisionRule.GUARD_BAND) {
-      findings.add(
-          TestlogFinding.NOT_SUPPORTED_YET,
-          sheet,
-          "the decision rule belongs to acceptance limits, which are not supported yet");
-    }
   }
 
   private List<Run> runs(List<Claim> claims, ReductionOptions options, boolean stated) {

@@ -58,6 +58,9 @@ final class OptionsReader {
     items.put("Reciprocity limit", "largest |z| of a pair");
     items.put("Base motion limit", "largest share of a reading, %");
     items.put("Decision rule", "guard band, or simple");
+    items.put(
+        "Probability of being wrong",
+        "largest one with a pass or a fail, %, above 0 and below 50; usually 5");
     return items;
   }
 
@@ -156,8 +159,26 @@ final class OptionsReader {
         gravity(common),
         choice(common, "Base motion", List.of("take out", "leave")) == 0,
         quality,
-        List.of(DecisionRule.values())
-            .get(choice(common, "Decision rule", List.of("guard band", "simple"))));
+        rule(common));
+  }
+
+  private DecisionRule rule(Map<String, EntryTable.Entry> common) {
+    DecisionRule.Kind kind =
+        List.of(DecisionRule.Kind.values())
+            .get(choice(common, "Decision rule", List.of("guard band", "simple")));
+    double usual = DecisionRule.GUARD_BAND.largestProbability();
+    double stated = share(common, "Probability of being wrong", usual);
+    if (stated > 0 && stated < 0.5) {
+      return new DecisionRule(kind, stated);
+    }
+    EntryTable.Entry entry = common.get("Probability of being wrong");
+    if (entry != null) {
+      findings.add(
+          TestlogFinding.OUT_OF_RANGE,
+          entry.get("Entry").where(),
+          "found " + 100 * stated + " %; expected a probability above 0 and below 50 %");
+    }
+    return new DecisionRule(kind, usual);
   }
 
   private double gravity(Map<String, EntryTable.Entry> common) {

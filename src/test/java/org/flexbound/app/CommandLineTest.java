@@ -8,8 +8,6 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.params.ParameterizedTest;
-import org.junit.jupiter.params.provider.ValueSource;
 
 /** The words of the command line and the exit codes. */
 class CommandLineTest {
@@ -49,13 +47,6 @@ class CommandLineTest {
   void anUnknownCommandGetsTheNearestOnes() {
     assertThat(run("updat", "study.json")).isEqualTo(2);
     assertThat(err.toString()).contains("updat").contains("flexbound update");
-  }
-
-  @ParameterizedTest
-  @ValueSource(strings = {"check", "recheck", "trend"})
-  void whatIsNotMadeYetIsRefusedByNameAndNotIgnored(String command) {
-    assertThat(run(command, "one", "--two", "three")).isEqualTo(2);
-    assertThat(err.toString()).contains("'" + command + "'").contains("not supported yet");
   }
 
   @Test

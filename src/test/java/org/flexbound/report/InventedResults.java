@@ -17,6 +17,7 @@ final class InventedResults {
   private final int gauges;
   private final int loads;
   private final int steps;
+  private int limitSets = 1;
   private final Random random = new Random(20260117);
 
   private InventedResults(UnaryOperator<String> name, int gauges, int loads, int steps) {
@@ -34,6 +35,13 @@ final class InventedResults {
   /** A small test in which every name that a user can choose is changed. */
   static Results named(UnaryOperator<String> name) {
     return new InventedResults(name, 4, 2, 5).make();
+  }
+
+  /** A small test with three limits so often. */
+  static Results limited(UnaryOperator<String> name, int times) {
+    InventedResults results = new InventedResults(name, 4, 2, 5);
+    results.limitSets = times;
+    return results.make();
   }
 
   /** A large test. */
@@ -202,9 +210,65 @@ final class InventedResults {
                 CONFIGURATION, gauge(0), load(0), 1.1e-6, 1.08e-6, 2e-8, 1.04e-6, 1.12e-6, 1.0,
                 true, "m/N")),
         Optional.empty(),
-        List.of(),
+        limits(),
+        List.of(
+            new FixtureShare(
+                CONFIGURATION, gauge(0), load(0), "m/N", 1.1e-6, 1e-8, 0.9e-6, 2e-8,
+                OptionalDouble.of(0.18), OptionalDouble.of(0.02))),
+        Optional.of(
+            new Recheck(
+                name.apply("earlier.json"), name.apply("earlier"), "2025-01-17",
+                List.of(
+                    new CoefficientChange(
+                        CONFIGURATION, gauge(0), load(0), "m/N", 1e-6, 1.1e-6, 1e-7, 1e-8,
+                        OptionalDouble.of(20), 1e-9, 2e-9, true)),
+                120, 6, OptionalDouble.of(34), 1e-9, true, List.of(name.apply("cell")),
+                Optional.of(
+                    new ChangeExplanation(
+                        true,
+                        List.of(
+                            new ChangeSubset(
+                                List.of(
+                                    new ParameterChange(
+                                        name.apply("clamp"), OptionalDouble.of(0.4))),
+                                4, 9, 5)))))),
         List.of(new Energy(CONFIGURATION, name.apply("R00"), 11.3, true)),
         curves);
+  }
+
+  private List<Limit> limits() {
+    List<Limit> limits = new ArrayList<>();
+    for (int k = 0; k < limitSets; k++) {
+      limits.add(limit("pass", 3.8e-9, 0.99));
+      limits.add(limit("undecided", 3.98e-9, 0.6));
+      limits.add(limit("fail", 5e-9, 0));
+    }
+    return limits;
+  }
+
+  private Limit limit(String decision, double value, double probability) {
+    return new Limit(
+        CONFIGURATION,
+        name.apply("stiff enough"),
+        "coefficient",
+        gauge(0) + " under " + load(0),
+        OptionalDouble.of(value),
+        OptionalDouble.of(0.08e-9),
+        OptionalDouble.of(17),
+        OptionalDouble.empty(),
+        OptionalDouble.of(4e-9),
+        "m/N",
+        "µm/kN",
+        1e-9,
+        2,
+        "guarded",
+        0.05,
+        OptionalDouble.of(0.14e-9),
+        OptionalDouble.of(probability),
+        decision,
+        OptionalDouble.of(Math.min(probability, 1 - probability)),
+        decision.equals("undecided") ? "2 more runs would settle it" : "",
+        List.of(new UncertaintyShare(name.apply("cell"), 0.7)));
   }
 
   private void coefficient(

@@ -33,7 +33,7 @@ import org.xml.sax.InputSource;
 
 /** The web page, the PDF and the workbook. */
 class ReportOutputsTest {
-  private static final String HOSTILE =
+  static final String HOSTILE =
       "=1+1 <script>alert(1)</script> \"q\" 'a' & \n \u202Eabc\u202C שלום 梁 \u0001 ]]> ";
 
   private static ReportPage small;
@@ -133,7 +133,8 @@ class ReportOutputsTest {
       for (PDOutlineItem item : pdf.getDocumentCatalog().getDocumentOutline().children()) {
         bookmarks.add(item.getTitle());
       }
-      assertThat(bookmarks).startsWith("The answer", "Findings").contains("Cautions");
+      assertThat(bookmarks).startsWith(
+              "The answer", "Change since the earlier test", "Limits and decisions", "Findings").contains("Cautions");
       String text = new PDFTextStripper().getText(pdf);
       assertThat(text).contains("What remains unknown?", "kN·m/rad", "Signature", "ν");
     }
@@ -176,8 +177,9 @@ class ReportOutputsTest {
       workbook.forEach(sheet -> names.add(sheet.getSheetName()));
       assertThat(names)
           .containsExactly(
-              "Runs", "Coefficients", "Covariance", "Reciprocity", "Matrix checks", "Comparison", "Parameters", "Update", "Combinations", "Without each case", "Influence",
-              "Trade-off", "Configurations", "Gains", "Held out",
+              "Runs", "Coefficients", "Covariance", "Reciprocity", "Matrix checks", "Limits", "Fixture",
+              "Changes", "Comparison", "Parameters", "Update", "Combinations", "Without each case",
+              "Influence", "Trade-off", "Configurations", "Gains", "Held out",
               "Findings", "Readings used", "Charts", "Left out");
       assertThat(workbook.getSheet("Charts").getDrawingPatriarch().getCharts()).hasSize(15);
       double value = InventedResults.small().coefficients().get(0).value();

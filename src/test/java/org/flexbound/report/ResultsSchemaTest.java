@@ -18,6 +18,7 @@ import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.TreeSet;
 import org.flexbound.report.results.Results;
+import org.flexbound.report.results.TrendResults;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import tools.jackson.databind.JsonNode;
@@ -40,7 +41,7 @@ class ResultsSchemaTest {
   @Test
   void everyFieldOfEveryRecordStandsInTheSchemaWithItsTypeAndAnExplanation() {
     List<String> problems = new ArrayList<>();
-    check(Results.class, schema, problems, new TreeSet<>());
+    check(Results.class, schema, schema.path("$defs"), problems, new TreeSet<>());
     assertThat(problems).isEmpty();
   }
 
@@ -57,8 +58,24 @@ class ResultsSchemaTest {
         .isNotEmpty();
   }
 
+  @Test
+  void theTrendsSchemaExplainsEveryFieldToo() throws Exception {
+    try (InputStream stream =
+        ResultsSchemaTest.class.getResourceAsStream("/schema/trend.schema.json")) {
+      JsonNode trend =
+          JsonMapper.shared()
+              .readTree(new String(stream.readAllBytes(), StandardCharsets.UTF_8));
+      List<String> problems = new ArrayList<>();
+      check(TrendResults.class, trend, trend.path("$defs"), problems, new TreeSet<>());
+      assertThat(problems).isEmpty();
+    }
+  }
+
   private static void check(
-      Class<?> type, JsonNode definition, List<String> problems, Set<String> seen) {
+      Class<?> type,
+      JsonNode definition,
+      JsonNode known,
+      List<String> problems, Set<String> seen) {
     if (!seen.add(type.getSimpleName())) {
       return;
     }
@@ -77,7 +94,7 @@ class ResultsSchemaTest {
       } else {
         required.add(component.getName());
       }
-      shape(inner, property, where, problems, seen);
+      shape(inner, property, known, where, problems, seen);
     }
     if (!names.equals(new ArrayList<>(definition.path("properties").propertyNames()))) {
       problems.add(type.getSimpleName() + " has other fields than " + names);
@@ -94,10 +111,10 @@ class ResultsSchemaTest {
   }
 
   private static void shape(
-      Type type, JsonNode property, String where, List<String> problems, Set<String> seen) {
+      Type type, JsonNode property, JsonNode known, String where, List<String> problems, Set<String> seen) {
     if (type instanceof ParameterizedType list) {
       expect("array", property, where, problems);
-      shape(argument(list), property.path("items"), where, problems, seen);
+      shape(argument(list), property.path("items"), known, where, problems, seen);
     } else if (type == String.class) {
       expect("string", property, where, problems);
     } else if (type == double.class || type == Double.class) {
@@ -111,7 +128,7 @@ class ResultsSchemaTest {
       if (!property.path("$ref").asString("").equals("#/$defs/" + record.getSimpleName())) {
         problems.add(where + " does not refer to " + record.getSimpleName());
       }
-      check(record, schema.path("$defs").path(record.getSimpleName()), problems, seen);
+      check(record, known.path(record.getSimpleName()), known, problems, seen);
     }
   }
 

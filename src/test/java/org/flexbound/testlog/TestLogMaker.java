@@ -100,6 +100,31 @@ public final class TestLogMaker {
     return this;
   }
 
+  /** Adds a displacement gauge at a node that measures the fixture and is no base gauge. */
+  public TestLogMaker fixtureGauge(
+      String name, String node, Direction direction, String instrument) {
+    gauge(name, node, direction, instrument, false);
+    gauges.computeIfPresent(
+        name,
+        (key, g) ->
+            new Gauge(
+                g.name(),
+                g.kind(),
+                g.station(),
+                g.second(),
+                g.coordinates(),
+                g.direction(),
+                g.sectionPoint(),
+                Part.FIXTURE,
+                Part.GROUND,
+                false,
+                g.instrument(),
+                g.placing(),
+                g.remark(),
+                g.where()));
+    return this;
+  }
+
   /** Replaces the options. */
   public TestLogMaker options(ReductionOptions other) {
     options = other;

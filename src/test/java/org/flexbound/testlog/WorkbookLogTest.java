@@ -171,13 +171,13 @@ class WorkbookLogTest {
   }
 
   @Test
-  void whatIsNotSupportedYetIsRefused() {
+  void limitsAreReadInTheirUnit() {
     WorkbookMaker maker = twoPoints();
     maker.row("Limits", "Limit", "On", "Gauge", "Load", "Upper", "Unit");
     maker.row("Limits", "L1", "coefficient", "at tip", "tip", 1.0, "mm/kN");
-    assertThat(read(maker).findings())
-        .extracting(finding -> finding.code() + " " + finding.where())
-        .containsExactly("LOG-NOT-SUPPORTED-YET log.xlsx, sheet Limits, cell A2");
+    TestLog log = read(maker).orRefuse();
+    assertThat(log.limits()).hasSize(1);
+    assertThat(log.limits().get(0).upper()).hasValue(1e-6);
   }
 
   @Test

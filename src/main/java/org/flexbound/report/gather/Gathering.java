@@ -7,6 +7,8 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import org.flexbound.acceptance.ChangeReport;
+import org.flexbound.acceptance.Decision;
 import org.flexbound.finding.Finding;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.reduce.PlannedFlexibility;
@@ -21,16 +23,19 @@ import org.flexbound.report.results.Covariance;
 import org.flexbound.report.results.Curve;
 import org.flexbound.report.results.Energy;
 import org.flexbound.report.results.Exclusion;
+import org.flexbound.report.results.FixtureShare;
 import org.flexbound.report.results.Gauge;
 import org.flexbound.report.results.Input;
 import org.flexbound.report.results.Instrument;
 import org.flexbound.report.results.JointTest;
+import org.flexbound.report.results.Limit;
 import org.flexbound.report.results.Load;
 import org.flexbound.report.results.MatrixCheck;
 import org.flexbound.report.results.OperatorRow;
 import org.flexbound.report.results.Option;
 import org.flexbound.report.results.Parameter;
 import org.flexbound.report.results.Plan;
+import org.flexbound.report.results.Recheck;
 import org.flexbound.report.results.Reciprocity;
 import org.flexbound.report.results.Results;
 import org.flexbound.report.results.Run;
@@ -59,6 +64,9 @@ public final class Gathering {
   private final List<Reciprocity> reciprocity = new ArrayList<>();
   private final List<JointTest> jointTests = new ArrayList<>();
   private final List<MatrixCheck> matrixChecks = new ArrayList<>();
+  private final List<Limit> limits = new ArrayList<>();
+  private Optional<Recheck> recheck = Optional.empty();
+  private final List<FixtureShare> fixture = new ArrayList<>();
   private final List<Energy> energy = new ArrayList<>();
   private final List<Curve> curves = new ArrayList<>();
   private final Map<String, String> units = new LinkedHashMap<>();
@@ -198,6 +206,31 @@ public final class Gathering {
   }
 
   /**
+   * Decisions on acceptance limits, and how much of the motions is that of the fixture.
+   *
+   * @param decisions the decisions
+   * @param shares the fixture's shares
+   */
+  public void acceptance(
+      List<Decision> decisions, List<org.flexbound.acceptance.FixtureShare> shares) {
+    decisions.forEach(decision -> limits.add(LimitPart.limit(decision)));
+    for (org.flexbound.acceptance.FixtureShare share : shares) {
+      String key = ComparisonPart.key(share.configuration(), share.gauge(), share.load());
+      fixture.add(LimitPart.fixture(share, units.getOrDefault(key, "m/N")));
+    }
+  }
+
+  /**
+   * This test against an earlier one.
+   *
+   * @param report how it differs
+   * @param title the title of the earlier test
+   */
+  public void recheck(ChangeReport report, String title) {
+    recheck = Optional.of(HistoryPart.recheck(report, title));
+  }
+
+  /**
    * Everything together.
    *
    * @return the results
@@ -246,7 +279,9 @@ public final class Gathering {
                             units.getOrDefault(ComparisonPart.key(first, gauge, load), "m/N")))
             .orElse(List.<Validation>of()),
         plan,
-        List.of(),
+        limits,
+        fixture,
+        recheck,
         energy,
         curves);
   }

@@ -189,6 +189,12 @@ final class SetupPart {
                 + ", curvature " + share(o.qualityLimits().curvature())
                 + ", reciprocity |z| " + o.qualityLimits().reciprocityZ()
                 + " (common practice, no standard behind them)"));
+    result.add(
+        option(
+            "decision rule for limits",
+            o.decisionRule().guarded()
+                ? "guarded, wrong with at most " + share(o.decisionRule().largestProbability())
+                : "simple: the value alone decides"));
     return result;
   }
 

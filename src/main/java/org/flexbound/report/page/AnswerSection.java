@@ -33,6 +33,8 @@ final class AnswerSection {
     List<Block.Answer> answers = new ArrayList<>();
     answers.add(tested());
     answers.add(good());
+    LimitSection.answer(results).ifPresent(answers::add);
+    RecheckSection.answer(results).ifPresent(answers::add);
     if (!results.comparison().isEmpty()) {
       answers.add(agrees());
     }

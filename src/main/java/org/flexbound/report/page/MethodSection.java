@@ -62,6 +62,9 @@ final class MethodSection {
     items.add(
         "Reciprocity (Maxwell 1864, Betti 1872): a motion at i by a unit load at j equals a motion"
             + " at j by a unit load at i; judged on coefficients before base motion is taken out.");
+    if (!results.limits().isEmpty()) {
+      items.add(LimitSection.RULE);
+    }
     if (!results.comparison().isEmpty()) {
       items.add(
           "Computed flexibility: G = Bᵀ K⁻¹ C, of a frame of members with shear deformation, joints"

@@ -38,6 +38,8 @@ public final class ReportMaker {
             .plan()
             .map(plan -> new PlanAnswer(results, plan, shown).make())
             .orElseGet(() -> new AnswerSection(results, shown).make()));
+    new RecheckSection(results, shown).make().ifPresent(sections::add);
+    new LimitSection(results, shown).make().ifPresent(sections::add);
     sections.add(findings(results));
     sections.addAll(figures(results, units));
     sections.add(new TableSection(results, shown).make());

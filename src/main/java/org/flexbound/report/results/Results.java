@@ -36,6 +36,8 @@ import java.util.Optional;
  * @param validation held-out coefficients
  * @param plan the planned test, where nothing has been measured yet
  * @param limits acceptance limits and decisions
+ * @param fixture how much of the motions is that of base and fixture
+ * @param recheck this test against an earlier one; left out where there was no such question
  * @param energy stored energy of the runs
  * @param curves load-deflection curves
  */
@@ -70,6 +72,8 @@ public record Results(
     List<Validation> validation,
     Optional<Plan> plan,
     List<Limit> limits,
+    List<FixtureShare> fixture,
+    Optional<Recheck> recheck,
     List<Energy> energy,
     List<Curve> curves) {
   /** The version of the format that is written now. */
@@ -99,6 +103,7 @@ public record Results(
     parameters = List.copyOf(parameters);
     validation = List.copyOf(validation);
     limits = List.copyOf(limits);
+    fixture = List.copyOf(fixture);
     energy = List.copyOf(energy);
     curves = List.copyOf(curves);
   }

@@ -54,6 +54,7 @@ public final class ResultsWorkbook {
       covariance();
       reciprocity();
       MatrixSheets.write(workbook, styles, results);
+    LimitSheets.write(workbook, styles, results);
       comparison();
       parameters();
       new UpdateSheets(workbook, styles, results, units).write();
