@@ -20,6 +20,7 @@ import org.flexbound.document.OutputFolder;
 import org.flexbound.finding.Findings;
 import org.flexbound.finding.Outcome;
 import org.flexbound.finding.Refusal;
+import org.flexbound.flexibility.MeasuredFlexibility;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.FrameWriter;
 import org.flexbound.reduce.Places;

@@ -11,10 +11,8 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
-import java.util.Optional;
 import java.util.Random;
 import org.flexbound.compare.ConfiguredFrame;
-import org.flexbound.finding.Where;
 import org.flexbound.frame.FrameModel;
 import org.flexbound.frame.FrameReader;
 import org.flexbound.frame.StiffnessPath;
@@ -22,7 +20,6 @@ import org.flexbound.frame.StiffnessSetting;
 import org.flexbound.setup.Direction;
 import org.flexbound.setup.DirectionText;
 import org.flexbound.setup.Vector;
-import org.flexbound.study.Configuration;
 import org.flexbound.testlog.TestLog;
 import org.flexbound.testlog.TestLogMaker;
 
@@ -141,7 +138,6 @@ final class ClampingFixture {
     }
     TestLog log = maker.log();
     return ConfiguredFrame.nominal(
-            new Configuration("true", Optional.empty(), Optional.empty(), Where.nowhere()),
             model().with(settings),
             log.gauges(),
             log.loads())
