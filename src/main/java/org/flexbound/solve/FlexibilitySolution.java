@@ -52,6 +52,16 @@ public final class FlexibilitySolution implements ComputedFlexibility {
             l);
   }
 
+  /** The structure that was solved. */
+  Structure structure() {
+    return structure;
+  }
+
+  /** Its stiffnesses. */
+  State state() {
+    return state;
+  }
+
   /** What a functional reads under a column of motions. */
   private double read(Functional functional, int column) {
     return fields.read(functional, structure, state, column);

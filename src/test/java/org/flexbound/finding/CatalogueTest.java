@@ -2,6 +2,9 @@ package org.flexbound.finding;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 
@@ -40,5 +43,15 @@ class CatalogueTest {
     for (FindingKind kind : kinds()) {
       assertThat(page).containsOnlyOnce("| " + kind.code() + " |");
     }
+  }
+
+  /** After a change of a kind: {@code mvn -q test -Dtest=CatalogueTest -Dcatalogue.write=true}. */
+  @Test
+  void thePageOfTheDocumentationIsTheOneTheProgramWrites() throws IOException {
+    Path page = Path.of("src/site/findings.md");
+    if (Boolean.getBoolean("catalogue.write")) {
+      Files.writeString(page, ALL.page());
+    }
+    assertThat(page).hasContent(ALL.page());
   }
 }
