@@ -204,7 +204,8 @@ final class Work {
     if (StudyFiles.isStudy(file)) {
       StudyFiles files = read(file);
       test = prepare("recheck", files);
-      if (!files.study().parameters().isEmpty()) {
+      // a change is explained by the frame solver; tables of a model held elsewhere cannot be asked for it
+      if (!files.study().parameters().isEmpty() && files.tables().isEmpty()) {
         model =
             Optional.of(
                 new ChangeModel(
